@@ -1,0 +1,16 @@
+using System.Collections.Immutable;
+
+namespace MocapClean.Cli.Formats;
+
+/// <summary>All formats. A new one is one folder and one line here.</summary>
+public static class FormatCatalog
+{
+    /// <summary>In the order in which they are tried.</summary>
+    public static ImmutableArray<ITakeFormat> All { get; } =
+    [
+    ];
+
+    /// <summary>The format of a file by its ending, or null.</summary>
+    public static ITakeFormat? For(string path) =>
+        All.FirstOrDefault(f => f.Extensions.Any(e => path.EndsWith(e, StringComparison.OrdinalIgnoreCase)));
+}

@@ -1,0 +1,34 @@
+using System.Collections.Immutable;
+
+namespace MocapClean.Core.Stages.Settings;
+
+/// <summary>What a setting may look like.</summary>
+public abstract record Shape
+{
+    private Shape()
+    {
+    }
+
+    /// <summary>One word of a closed list.</summary>
+    public sealed record Choice(ImmutableArray<string> Words) : Shape;
+
+    /// <summary>
+    /// A number with its unit, within bounds in that unit (times in seconds), or one of a few words such as <c>auto</c> or <c>off</c>.
+    /// </summary>
+    public sealed record Quantity(Unit Unit, double Low, double High, ImmutableArray<string> OrWords) : Shape;
+
+    /// <summary>A whole number without unit.</summary>
+    public sealed record Count(int Low, int High) : Shape;
+
+    /// <summary>Any text that is not empty.</summary>
+    public sealed record Text : Shape;
+
+    /// <summary>A list of texts; a single text counts as a list of one.</summary>
+    public sealed record TextList : Shape;
+
+    /// <summary>One of these words.</summary>
+    public static Shape OneOf(params ReadOnlySpan<string> words) => new Choice([.. words]);
+
+    /// <summary>A number with unit, within bounds.</summary>
+    public static Shape Of(Unit unit, double low, double high, params ReadOnlySpan<string> orWords) => new Quantity(unit, low, high, [.. orWords]);
+}
