@@ -1,0 +1,47 @@
+using System.Collections.Immutable;
+using MocapClean.Core.Takes;
+
+namespace MocapClean.Core.Stages.Ingest;
+
+/// <summary>Finds where the delivered time skips, stands still or runs back. Rows of the whole take.</summary>
+internal static class ClockFaults
+{
+    /// <summary>A spacing above one and a half intervals cannot be rounding or jitter of one: at least one frame is lost.</summary>
+    private const double LostAbove = 1.5;
+
+    public static ImmutableArray<Finding> Find(Clock clock)
+    {
+        var found = ImmutableArray.CreateBuilder<Finding>();
+        for (var n = 1; n < clock.Length && !clock.IsRegular; n++)
+        {
+            var spacing = clock.Delivered[n] - clock.Delivered[n - 1];
+            if (spacing <= 0)
+            {
+                Stands(found, n, spacing);
+            }
+            else if (spacing * clock.Rate > LostAbove)
+            {
+                var lost = Math.Max(1, (long)Math.Round(spacing * clock.Rate) - 1);
+                found.Add(Row(n, FaultKind.LostFrames, FaultAction.Left, $"{lost} {(lost == 1 ? "frame" : "frames")} lost before this one"));
+            }
+        }
+
+        return found.ToImmutable();
+    }
+
+    /// <summary>Frames that follow each other in standing or running back are one row.</summary>
+    private static void Stands(ImmutableArray<Finding>.Builder found, int n, double spacing)
+    {
+        var back = spacing < 0;
+        if (found.Count > 0 && found[^1] is { Kind: FaultKind.Clock } before && before.Last == n - 1 && !back)
+        {
+            found[^1] = before with { Last = n };
+            return;
+        }
+
+        found.Add(Row(n, FaultKind.Clock, FaultAction.Flagged, back ? $"time runs back by {-spacing:0.######} s" : "time stands still"));
+    }
+
+    private static Finding Row(int n, FaultKind kind, FaultAction action, string note) =>
+        new() { Joint = -1, First = n, Last = n, Kind = kind, Action = action, Note = note };
+}
