@@ -35,6 +35,9 @@ public sealed record Finding
     /// <summary>The rotation that, multiplied on the right, would undo a step or offset.</summary>
     public Quat? UndoJoint { get; init; }
 
+    /// <summary>Frames that were never recorded between this frame and the one before; 0 but for lost frames.</summary>
+    public long Lost { get; init; }
+
     /// <summary>Plain words for the reader where kind and action do not say it all; empty otherwise.</summary>
     public string Note { get; init; } = "";
 

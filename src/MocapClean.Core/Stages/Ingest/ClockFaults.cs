@@ -22,7 +22,7 @@ internal static class ClockFaults
             else if (spacing * clock.Rate > LostAbove)
             {
                 var lost = Math.Max(1, (long)Math.Round(spacing * clock.Rate) - 1);
-                found.Add(Row(n, FaultKind.LostFrames, FaultAction.Left, $"{lost} {(lost == 1 ? "frame" : "frames")} lost before this one"));
+                found.Add(Row(n, FaultKind.LostFrames, FaultAction.Left, $"{lost} {(lost == 1 ? "frame" : "frames")} lost before this one") with { Lost = lost });
             }
         }
 
