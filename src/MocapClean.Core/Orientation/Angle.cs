@@ -9,6 +9,10 @@ public static class Angle
     /// <summary>Degrees from radians.</summary>
     public static double ToDegrees(double radians) => radians * (180 / Math.PI);
 
+    /// <summary>The angle moved by whole periods (full turns, where not said) to be as near as possible to another.</summary>
+    public static double Nearest(double angle, double other, double period = 2 * Math.PI) =>
+        angle + (period * Math.Round((other - angle) / period));
+
     /// <summary>
     /// The angle of the turn from one orientation to the other, radians in [0, pi]. Signs and lengths do not matter.
     /// By atan2 of the vector part and the inner product, so it is accurate near 0 and near pi alike, where 2 acos(dot) is not.

@@ -68,6 +68,8 @@ public readonly record struct Quat(double W, double X, double Y, double Z)
         return v + (W * t) + Vec3.Cross(Vector, t);
     }
 
-    private static ArithmeticException NoDirection(Quat q) =>
-        new($"({q.W}, {q.X}, {q.Y}, {q.Z}) is no orientation: its length is 0 or not finite");
+    /// <summary>"(w, x, y, z)". Spelled out, since a record would print its conjugate, and that one its own, without end.</summary>
+    public override string ToString() => $"({W}, {X}, {Y}, {Z})";
+
+    private static ArithmeticException NoDirection(Quat q) => new($"{q} is no orientation: its length is 0 or not finite");
 }

@@ -30,4 +30,7 @@ public readonly record struct Vec3(double X, double Y, double Z)
     /// <summary>Vector product, right-handed.</summary>
     public static Vec3 Cross(Vec3 a, Vec3 b) =>
         new((a.Y * b.Z) - (a.Z * b.Y), (a.Z * b.X) - (a.X * b.Z), (a.X * b.Y) - (a.Y * b.X));
+
+    /// <summary>"(x, y, z)".</summary>
+    public override string ToString() => $"({X}, {Y}, {Z})";
 }
