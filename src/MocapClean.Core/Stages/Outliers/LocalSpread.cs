@@ -1,0 +1,76 @@
+namespace MocapClean.Core.Stages.Outliers;
+
+/// <summary>
+/// What the tests measure on healthy motion before and after a place: the unit in which a fault is told from motion. The livelier side
+/// counts, so that neither the end of a rest nor a blow is a fault.
+/// </summary>
+/// <param name="path">The series.</param>
+/// <param name="runs">The test of runs.</param>
+/// <param name="edges">The test of edges.</param>
+/// <param name="place">The samples that are in doubt and are not asked.</param>
+/// <param name="noise">Floor: the spread of one sample's noise, radians.</param>
+internal sealed class LocalSpread(MotionPath path, RunTest runs, EdgeTest edges, (int First, int Last) place, double noise)
+{
+    /// <summary>Seconds on either side that are the neighbourhood.</summary>
+    private const double Seconds = 0.4;
+
+    /// <summary>Tests on either side: enough for a median.</summary>
+    private const int Wanted = 24;
+    private const int Fewest = 8;
+
+    private readonly Dictionary<Pattern, Measure?> ofRuns = [];
+    private readonly Dictionary<Pattern, Measure?> ofEdges = [];
+
+    /// <summary>Spreads of size and misfit of healthy runs seen with the same neighbours; null where nothing healthy is near.</summary>
+    public Measure? OfRun(Pattern pattern) => Once(ofRuns, pattern, first => runs.At(path, first, first + pattern.Run - 1, pattern));
+
+    /// <summary>Spreads of size and misfit of healthy edges.</summary>
+    public Measure? OfEdge(Pattern pattern) => Once(
+        ofEdges, pattern, first => edges.Across(path, first, first + pattern.Run - 1, pattern)?.Room);
+
+    private Measure? Once(Dictionary<Pattern, Measure?> known, Pattern pattern, Func<int, Measure?> test)
+    {
+        if (!known.TryGetValue(pattern, out var found))
+        {
+            known[pattern] = found = Around(pattern, test);
+        }
+
+        return found;
+    }
+
+    private Measure? Around(Pattern pattern, Func<int, Measure?> test)
+    {
+        var before = OneSide(pattern, place.First - 1, -1, test);
+        var after = OneSide(pattern, place.Last + 1, 1, test);
+        if (before is null && after is null)
+        {
+            return null;
+        }
+
+        var size = Math.Max(before?.Size ?? 0, after?.Size ?? 0);
+        var misfit = Math.Max(before?.Misfit ?? 0, after?.Misfit ?? 0);
+        // White noise leaves its own size times the root of the free values over; a prediction from few neighbours about doubles it.
+        return new Measure(pattern, Math.Max(size, 2 * noise), Math.Max(misfit, noise * Math.Sqrt(pattern.Before + pattern.After - 4)));
+    }
+
+    private Measure? OneSide(Pattern pattern, int from, int direction, Func<int, Measure?> test)
+    {
+        var window = Math.Max((int)(Seconds * path.Rate), Wanted);
+        var stride = Math.Max(1, window / Wanted);
+        Span<double> sizes = stackalloc double[Wanted];
+        Span<double> misfits = stackalloc double[Wanted];
+        var count = 0;
+        for (var step = 0; count < Wanted && step < 4 * window; step += stride)
+        {
+            var near = from + (direction * step);
+            var first = direction > 0 ? near + pattern.Before : near - pattern.After - pattern.Run + 1;
+            if (path.IsWhole(first - pattern.Before, first + pattern.Run + pattern.After - 1) && test(first) is { } healthy)
+            {
+                (sizes[count], misfits[count]) = (healthy.Size, healthy.Misfit);
+                count++;
+            }
+        }
+
+        return count < Fewest ? null : new Measure(pattern, RobustSpread.Of(sizes[..count]), RobustSpread.Of(misfits[..count]));
+    }
+}
