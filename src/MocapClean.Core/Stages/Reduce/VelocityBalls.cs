@@ -1,0 +1,104 @@
+using System.Runtime.CompilerServices;
+using System.Runtime.Intrinsics;
+
+namespace MocapClean.Core.Stages.Reduce;
+
+/// <summary>
+/// Seen from one key, what each later frame demands of a constant angular velocity that starts there (radians a second, in the key's own
+/// frame): to lie in a ball about u / t, with u the rotation vector to the frame and t the time to it. Within <c>Inner</c> is enough, as
+/// the exponential never stretches; within <c>Outer</c> is necessary, as between two points at most 2 f from the key it shrinks by no more
+/// than sin f / f. Both radii allow for the rounding and for the short series used here, so they refute and accept only what is sure.
+/// </summary>
+internal readonly struct VelocityBalls
+{
+    /// <summary>Largest error of a rotation vector here, radians, with room to spare.</summary>
+    private const double LogError = 2e-8;
+
+    private static readonly double Sqrt3 = Math.Sqrt(3);
+
+    private readonly Vector256<double> w;
+    private readonly Vector256<double> x;
+    private readonly Vector256<double> y;
+    private readonly Vector256<double> z;
+    private readonly Vector256<double> start;
+    private readonly Vector256<double> necessary;
+    private readonly Vector256<double> enough;
+
+    /// <summary>Balls seen from a frame.</summary>
+    /// <param name="stretch">The samples.</param>
+    /// <param name="key">The frame.</param>
+    /// <param name="necessary">Tolerance of the outer balls, radians.</param>
+    /// <param name="enough">Tolerance of the inner balls, radians; none is certain to be inside where this is negative.</param>
+    public VelocityBalls(Stretch stretch, int key, double necessary, double enough)
+    {
+        var q = stretch[key];
+        (w, x, y, z) = (Vector256.Create(q.W), Vector256.Create(q.X), Vector256.Create(q.Y), Vector256.Create(q.Z));
+        start = Vector256.Create(stretch.Time[key]);
+        this.necessary = Vector256.Create(necessary);
+        this.enough = Vector256.Create((enough - (2 * LogError)) / Sqrt3);
+    }
+
+    /// <summary>The balls of four frames.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    public void Of(in FourQuats q, Vector256<double> times, ref FourBalls balls)
+    {
+        var dot = (w * q.W) + (x * q.X) + (y * q.Y) + (z * q.Z);
+        // The short way round: all components of key* q take the sign of its w.
+        var sign = dot & Vector256.Create(-0.0);
+        var facing = dot ^ sign;
+        var half = Vector256<double>.One / (facing + Vector256<double>.One);
+        var square = (Vector256<double>.One - facing) * half;
+        var series = Arctangent(square);
+        var scale = (4 * series * half) ^ sign;
+        var perSecond = Vector256<double>.One / (times - start);
+        var stretch = scale * perSecond;
+        balls.Facing = dot;
+        balls.X = ((w * q.X) - (x * q.W) - (y * q.Z) + (z * q.Y)) * stretch;
+        balls.Y = ((w * q.Y) - (y * q.W) - (z * q.X) + (x * q.Z)) * stretch;
+        balls.Z = ((w * q.Z) - (z * q.W) - (x * q.Y) + (y * q.X)) * stretch;
+        balls.Inner = enough * perSecond;
+        balls.Outer = ((necessary * Shrinkage(16 * series * series * square)) + Vector256.Create(2 * LogError)) * perSecond;
+    }
+
+    /// <summary>
+    /// An upper bound of f / sin f with f = (|u| + tolerance) / 2, from |u| squared: (|u| + d)^2 is at most 1.1 |u|^2 + 11 d^2, and
+    /// 1 + f^2 / 6 + 0.03 f^4 is above f / sin f up to f = pi/2. Beyond, the frame demands nothing.
+    /// </summary>
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    private Vector256<double> Shrinkage(Vector256<double> turnSquared)
+    {
+        var f2 = (0.275 * turnSquared) + (2.75 * necessary * necessary);
+        var bound = Vector256<double>.One + (f2 * (Vector256.Create(1 / 6.0) + (0.03 * f2)));
+        return Vector256.ConditionalSelect(
+            Vector256.GreaterThan(f2, Vector256.Create(Math.PI * Math.PI / 4)), Vector256.Create(double.PositiveInfinity), bound);
+    }
+
+    /// <summary>atan(s) / s from s squared in [0, 1]: Chebyshev fit of degree 9, within 3e-9.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    private static Vector256<double> Arctangent(Vector256<double> square)
+    {
+        var sum = Vector256.Create(-0.0017437011332367548);
+        sum = (sum * square) + Vector256.Create(0.01068071939260335);
+        sum = (sum * square) + Vector256.Create(-0.030717508790498865);
+        sum = (sum * square) + Vector256.Create(0.057463557715784645);
+        sum = (sum * square) + Vector256.Create(-0.08372063938797225);
+        sum = (sum * square) + Vector256.Create(0.10940198961187342);
+        sum = (sum * square) + Vector256.Create(-0.1426157367926612);
+        sum = (sum * square) + Vector256.Create(0.1999823064022923);
+        sum = (sum * square) + Vector256.Create(-0.3333328229550229);
+        return (sum * square) + Vector256.Create(0.9999999975460191);
+    }
+}
+
+/// <summary>The balls of four frames, number by number.</summary>
+internal struct FourBalls
+{
+    /// <summary>Centres, radians a second.</summary>
+    public Vector256<double> X, Y, Z;
+
+    /// <summary>Necessary radii, and half the sides of cubes that fit into the sufficient balls, radians a second.</summary>
+    public Vector256<double> Outer, Inner;
+
+    /// <summary>Inner products of the key and the frames: the cosine of half the turn, with the sign as written.</summary>
+    public Vector256<double> Facing;
+}
