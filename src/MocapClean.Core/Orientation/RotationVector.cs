@@ -1,6 +1,6 @@
 namespace MocapClean.Core.Orientation;
 
-/// <summary>Rotation vectors: the axis times the angle in radians. Source: Diebel 2006, section 7.</summary>
+/// <summary>Rotation vectors: the axis times the angle in radians. Source: Diebel 2006.</summary>
 public static class RotationVector
 {
     /// <summary>
