@@ -16,7 +16,7 @@ public sealed record IngestSettings
     [
         new("off-unit", Shape.Of(Unit.Percent, 0.0001, 50), "1 %",
             "norm error that is a finding; smaller ones are rounding", (s, v) => s with { OffUnit = v.Fraction }),
-        new("rest-frame", Shape.OneOf("auto", "as-motion"), "auto",
+        new("bvh.rest-frame", Shape.OneOf("auto", "as-motion"), "auto",
             "auto: a first frame in which most joints stand elsewhere is labelled rest-pose and left; as-motion: judged like any other",
             (s, v) => s with { RecogniseRestPose = v.Word == "auto" }),
     ]);

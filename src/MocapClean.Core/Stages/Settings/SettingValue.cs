@@ -12,7 +12,7 @@ public sealed record SettingValue
     /// <summary>A <see cref="Unit.FramesOrTime"/> value was given in frames.</summary>
     public bool InFrames { get; init; }
 
-    /// <summary>The word, or empty for a number.</summary>
+    /// <summary>The word or text, <c>true</c> or <c>false</c> for a flag, or empty for a number.</summary>
     public string Word { get; init; } = "";
 
     /// <summary>The texts of a list.</summary>

@@ -20,11 +20,17 @@ public abstract record Shape
     /// <summary>A whole number without unit.</summary>
     public sealed record Count(int Low, int High) : Shape;
 
-    /// <summary>Any text that is not empty.</summary>
-    public sealed record Text : Shape;
+    /// <summary>True or false.</summary>
+    public sealed record Flag : Shape;
 
-    /// <summary>A list of texts; a single text counts as a list of one.</summary>
-    public sealed record TextList : Shape;
+    /// <summary>Any text that is not empty, holding each of these parts.</summary>
+    public sealed record Text(params ImmutableArray<string> Holding) : Shape;
+
+    /// <summary>A list of texts; a single text counts as a list of one. Of a fixed length and without repeats where one is given, else of any.</summary>
+    public sealed record TextList(int? Length = null) : Shape;
+
+    /// <summary>A list, not empty, of words of a closed list; a single word counts as a list of one.</summary>
+    public sealed record WordList(params ImmutableArray<string> Words) : Shape;
 
     /// <summary>One of these words.</summary>
     public static Shape OneOf(params ReadOnlySpan<string> words) => new Choice([.. words]);

@@ -1,0 +1,24 @@
+namespace MocapClean.Cli.Config;
+
+/// <summary>Gathers what is wrong with one file, so that all of it is told at once.</summary>
+/// <param name="file">The file, as the user named it.</param>
+internal sealed class ProblemList(string file)
+{
+    private readonly List<ConfigProblem> problems = [];
+
+    /// <summary>The file, as the user named it.</summary>
+    public string File => file;
+
+    /// <summary>Adds one.</summary>
+    public void Add(Place at, string message) => problems.Add(new(file, at, message));
+
+    /// <summary>Ends here when anything was wrong.</summary>
+    /// <exception cref="ConfigException">Something was.</exception>
+    public void ThrowIfAny()
+    {
+        if (problems.Count > 0)
+        {
+            throw new ConfigException([.. problems.OrderBy(p => p.At.Line).ThenBy(p => p.At.Column)]);
+        }
+    }
+}

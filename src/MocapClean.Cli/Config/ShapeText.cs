@@ -1,0 +1,43 @@
+using MocapClean.Core.Stages.Settings;
+
+namespace MocapClean.Cli.Config;
+
+/// <summary>Puts the shape of a setting into words.</summary>
+internal static class ShapeText
+{
+    /// <summary>What the key takes, and what stands there instead.</summary>
+    public static string Mismatch(KeyNode key, string found) => $"{key.Path} takes {Wanted(key.Setting!)}, not {found}";
+
+    /// <summary>A bound, in the unit that the value was written in.</summary>
+    public static string Amount(double amount, UnitSpelling spelling) => $"{amount * spelling.Per / spelling.Times} {spelling.Text}".TrimEnd();
+
+    /// <summary>What a setting takes, in words.</summary>
+    public static string Wanted(Setting setting) => setting.Shape switch
+    {
+        Shape.Choice choice => choice.Words is [var only] ? $"the word {only}" : "one of " + Either(choice.Words),
+        Shape.Quantity quantity => Quantity(setting, quantity),
+        Shape.Count count => $"a whole number from {count.Low} to {count.High}",
+        Shape.Flag => "true or false",
+        Shape.Text { Holding: [] } => "a text",
+        Shape.Text text => $"a text with {string.Join(" and ", text.Holding)} in it",
+        Shape.WordList words => $"a list of {Either(words.Words)}",
+        Shape.TextList { Length: { } length } => $"a list of {length} different texts",
+        _ => "a text or a list of texts",
+    };
+
+    /// <summary>Words with commas and an "or".</summary>
+    public static string Either(IReadOnlyList<string> words) => Joined(words, "or");
+
+    /// <summary>Words with commas and an "and".</summary>
+    public static string All(IReadOnlyList<string> words) => Joined(words, "and");
+
+    private static string Joined(IReadOnlyList<string> words, string last) =>
+        words.Count < 2 ? string.Concat(words) : $"{string.Join(", ", words.SkipLast(1))} {last} {words[^1]}";
+
+    private static string Quantity(Setting setting, Shape.Quantity quantity)
+    {
+        var unit = UnitText.Of(quantity.Unit);
+        var example = char.IsAsciiDigit(setting.Default.FirstOrDefault()) ? setting.Default : setting.Example.Length > 0 ? setting.Example : unit.Example;
+        return $"{unit.Noun} such as '{example}'" + (quantity.OrWords is [] ? "" : $" or the word {Either(quantity.OrWords)}");
+    }
+}
