@@ -8,8 +8,15 @@ internal static class ShapeText
     /// <summary>What the key takes, and what stands there instead.</summary>
     public static string Mismatch(KeyNode key, string found) => $"{key.Path} takes {Wanted(key.Setting!)}, not {found}";
 
-    /// <summary>A bound, in the unit that the value was written in.</summary>
-    public static string Amount(double amount, UnitSpelling spelling) => $"{amount * spelling.Per / spelling.Times} {spelling.Text}".TrimEnd();
+    /// <summary>Both bounds, in the spelling that the value was written in, or in a smaller one where that would be a tiny number.</summary>
+    public static string Bounds(Shape.Quantity quantity, UnitText unit, UnitSpelling spelling) =>
+        $"from {Amount(quantity.Low, unit, spelling)} to {Amount(quantity.High, unit, spelling)}";
+
+    private static string Amount(double amount, UnitText unit, UnitSpelling spelling)
+    {
+        var fit = amount > 0 && amount / spelling.Times < 0.001 ? unit.Spellings[^1] : spelling;
+        return $"{amount * fit.Per / fit.Times} {fit.Text}".TrimEnd();
+    }
 
     /// <summary>What a setting takes, in words.</summary>
     public static string Wanted(Setting setting) => setting.Shape switch

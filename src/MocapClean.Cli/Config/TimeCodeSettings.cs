@@ -1,11 +1,15 @@
+using System.Collections.Immutable;
 using MocapClean.Core.Stages.Settings;
+using MocapClean.Core.Takes;
 
 namespace MocapClean.Cli.Config;
 
 /// <summary>How frames of takes become time-code addresses.</summary>
 public sealed record TimeCodeSettings
 {
-    /// <summary>Nominal rate as written, such as <c>29.97</c>; empty: no time code.</summary>
+    private static readonly ImmutableArray<string> Rates = [.. TimeCodeRate.All.Where(r => !r.DropFrame).Select(r => r.Name)];
+
+    /// <summary>Rate as written, such as <c>29.97</c>; empty: no time code.</summary>
     public string Rate { get; init; } = "";
 
     /// <summary>Drop-frame counting, at 29.97 and 59.94 only.</summary>
@@ -20,7 +24,7 @@ public sealed record TimeCodeSettings
     /// <summary>The settings as the config knows them.</summary>
     public static SettingBlock<TimeCodeSettings> Table { get; } = new("time-code", "Addresses (SMPTE ST 12-1) beside frame numbers.",
     [
-        new("rate", Shape.OneOf("23.976", "24", "25", "29.97", "30", "50", "59.94", "60"), "", "time-code frames a second",
+        new("rate", new Shape.Choice(Rates), "", "time-code frames a second",
             (s, v) => s with { Rate = v.Word }) { Example = "25" },
         new("drop-frame", new Shape.Flag(), "false", "drop-frame counting, at 29.97 and 59.94",
             (s, v) => s with { IsDropFrame = v.Word == "true" }),
@@ -30,10 +34,13 @@ public sealed record TimeCodeSettings
             (s, v) => s with { Column = v.Word }) { Example = "timecode" },
     ]);
 
+    /// <summary>How frames are counted; null where there is no time code.</summary>
+    public TimeCodeRate? CountedAt => TimeCodeRate.All.FirstOrDefault(r => r.Name == (IsDropFrame ? Rate + " DF" : Rate));
+
     /// <summary>What does not go together, as a key of this block and a message; null when all does.</summary>
     internal (string Key, string Message)? Conflict() => this switch
     {
-        { IsDropFrame: true, Rate: not ("29.97" or "59.94") } => ("drop-frame", "time-code.drop-frame goes with time-code.rate 29.97 or 59.94 only"),
+        { IsDropFrame: true, CountedAt: null } => ("drop-frame", "time-code.drop-frame goes with time-code.rate 29.97 or 59.94 only"),
         { Rate: "", Slates.Length: > 0 } => ("slates", "time-code.slates needs time-code.rate"),
         { Rate: "", Column.Length: > 0 } => ("column", "time-code.column needs time-code.rate"),
         { Slates.Length: > 0, Column.Length: > 0 } => ("column", "give time-code.slates or time-code.column, not both"),

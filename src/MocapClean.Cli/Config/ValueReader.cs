@@ -61,7 +61,7 @@ internal sealed class ValueReader(ProblemList problems)
 
         return amount >= quantity.Low && amount <= quantity.High
             ? (new() { Number = amount, InFrames = inFrames }, "")
-            : (null, $"{key.Path} goes from {ShapeText.Amount(quantity.Low, spelling)} to {ShapeText.Amount(quantity.High, spelling)}, not '{text}'");
+            : (null, $"{key.Path} goes {ShapeText.Bounds(quantity, unit, spelling)}, not '{text}'");
     }
 
     private static (SettingValue? Value, string Wrong) Count(string text, Shape.Count count, KeyNode key)

@@ -5,6 +5,7 @@ using MocapClean.Core.Stages.Reduce;
 using MocapClean.Core.Stages.Settings;
 using MocapClean.Core.Stages.Smooth;
 using MocapClean.Core.Takes;
+using Xunit;
 
 namespace MocapClean.Cli.Tests.Config;
 
@@ -128,7 +129,7 @@ public sealed class ConfigReaderTests
     [InlineData("fill: {method: none, worst: 3 deg}", "3:29: fill.worst belongs to methods gaussian-process, spline and slerp, not none")]
     [InlineData("smooth: [1]", "3:9: smooth takes a block of keys or a method, not a list")]
     [InlineData("limits: 3 GB", "3:9: limits takes a block of keys, not '3 GB'")]
-    [InlineData("limits: {take-size: 4 GB}", "3:21: limits.take-size goes from 1E-06 GB to 2 GB, not '4 GB'")]
+    [InlineData("limits: {take-size: 4 GB}", "3:21: limits.take-size goes from 1 kB to 2 GB, not '4 GB'")]
     [InlineData("time-code: {rate: 29.97, drop-frame: yes}", "3:38: time-code.drop-frame takes true or false, not 'yes'")]
     [InlineData("time-code: {rate: 25, drop-frame: true}", "3:35: time-code.drop-frame goes with time-code.rate 29.97 or 59.94 only")]
     [InlineData("time-code: {slates: s.csv}", "3:21: time-code.slates needs time-code.rate")]
@@ -148,9 +149,9 @@ public sealed class ConfigReaderTests
     [InlineData("ingest: {takes: x}", "day.yaml:1:1: output.folder is missing; give a text, such as out")]
     [InlineData("ingest:\noutput: {folder: out}", "day.yaml:1:1: ingest.takes is missing; give a text or a list of texts, such as takes/**/*.csv")]
     [InlineData("ingest: {takes: []}\noutput: {folder: out}", "day.yaml:1:17: ingest.takes takes a text or a list of texts, not an empty list")]
-    [InlineData("output: {folder: out, keys: [csv, cvs]}\ningest: {takes: x}", "day.yaml:1:29: output.keys takes a list of csv, not 'cvs'")]
+    [InlineData("output: {folder: out, keys: [csv, cvs]}\ningest: {takes: x}", "day.yaml:1:29: output.keys takes a list of csv, not 'cvs'; did you mean 'csv'?")]
     [InlineData("output: {folder: ' '}\ningest: {takes: x}", "day.yaml:1:18: output.folder takes a text, not ' '")]
-    [InlineData("output: {folder: out}\ningest: {takes: x, csv: {components: [w, x, y]}}", "day.yaml:2:39: ingest.csv.components takes a list of 4 different texts, not [w, x, y]")]
+    [InlineData("output: {folder: out}\ningest: {takes: x, csv: {components: [w, x, y]}}", "day.yaml:2:38: ingest.csv.components takes a list of 4 different texts, not [w, x, y]")]
     [InlineData("output: {folder: out}\ningest: {takes: x, csv: {joint-columns: '{joint}'}}", "day.yaml:2:41: ingest.csv.joint-columns takes a text with {joint} and {component} in it, not '{joint}'")]
     [InlineData("just words", "day.yaml:1:1: a config is a block of keys, not 'just words'")]
     public void What_is_needed_must_be_there(string text, string expected) => Assert.Equal(expected, Reading.Problems(text));

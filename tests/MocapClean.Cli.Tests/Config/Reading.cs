@@ -1,4 +1,5 @@
 using MocapClean.Cli.Config;
+using Xunit;
 
 namespace MocapClean.Cli.Tests.Config;
 

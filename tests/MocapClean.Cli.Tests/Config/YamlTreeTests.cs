@@ -1,6 +1,7 @@
 using System.Text.Json;
 using MocapClean.Cli.Config;
 using MocapClean.Cli.Config.Yaml;
+using Xunit;
 
 namespace MocapClean.Cli.Tests.Config;
 

@@ -2,40 +2,53 @@ using System.Collections.Immutable;
 using System.Globalization;
 using CsvHelper;
 using MocapClean.Cli.Config.Yaml;
+using MocapClean.Core.Takes;
 
 namespace MocapClean.Cli.Config.Sources;
 
-/// <summary>Reads the CSV of slates: <c>take,frame,timecode</c> and, where wanted, <c>action_first,action_last</c>, in any order.</summary>
+/// <summary>
+/// Reads the CSV of slates: <c>take,frame,timecode</c> and, where wanted, <c>action_first,action_last</c>, in any order.
+/// Frames are numbered as in all that a person reads, from <c>output.first-frame</c>.
+/// </summary>
 public sealed class SlateReader
 {
     private static readonly ImmutableArray<string> Needed = ["take", "frame", "timecode"];
     private static readonly ImmutableArray<string> Action = ["action_first", "action_last"];
 
     private readonly ProblemList problems;
+    private readonly TimeCodeRate rate;
+    private readonly int firstFrame;
     private readonly ILookup<string, string> takes;
-    private readonly Dictionary<string, Slate> slates = [];
+    private readonly Dictionary<string, TakeSlate> slates = [];
     private readonly List<string> notes = [];
 
-    private SlateReader(string path, IReadOnlyCollection<string> names)
+    private SlateReader(string path, TimeCodeRate rate, int firstFrame, IReadOnlyCollection<string> names)
     {
         problems = new ProblemList(path);
+        this.rate = rate;
+        this.firstFrame = firstFrame;
         takes = names.SelectMany(n => Aliases(n).Select(alias => (Alias: alias, Name: n))).ToLookup(p => p.Alias, p => p.Name);
     }
 
-    /// <summary>Reads a file of slates.</summary>
-    /// <param name="path">The file.</param>
+    /// <summary>Reads the slates that a config names; a config may do without.</summary>
+    /// <param name="config">The config.</param>
     /// <param name="takes">Names of the session's takes; a slate names one by its whole name, its file name, or either without the ending.</param>
     /// <exception cref="ConfigException">The file cannot be read, or lines of it make no sense: all of them are told.</exception>
-    public static SlateTable Read(string path, IReadOnlyCollection<string> takes)
+    public static SlateTable Read(SessionConfig config, IReadOnlyCollection<string> takes)
     {
-        var reader = new SlateReader(path, takes);
+        if (config.SlatesFile is not { } path || config.TimeCode.CountedAt is not { } rate)
+        {
+            return SlateTable.Empty;
+        }
+
+        var reader = new SlateReader(path, rate, config.Output.FirstFrame, takes);
         if (ConfigText.Read(path, reader.problems) is { } text)
         {
             reader.ReadRows(text);
         }
 
         reader.problems.ThrowIfAny();
-        return new(path, reader.slates.ToImmutableDictionary(), [.. reader.notes]);
+        return new(reader.slates.ToImmutableDictionary(), [.. reader.notes]);
     }
 
     private static IEnumerable<string> Aliases(string name) => new[]
@@ -97,21 +110,22 @@ public sealed class SlateReader
         {
             problems.Add(at, $"'{name}' may be {ShapeText.Either(found)}; give more of the path");
         }
-        else if (Frame(csv, "frame", at, isNeeded: true) is { } frame && Code(csv, at) is { } code)
+        else if (Frame(csv, "frame", at, isNeeded: true) is { } frame && Address(csv.GetString("timecode"), at) is { } address)
         {
-            Add(found is [var only] ? only : null, name, new(name, frame, code, Frame(csv, "action_first", at), Frame(csv, "action_last", at), at));
+            var slate = new TakeSlate(name, new Slate(frame, address), Frame(csv, "action_first", at), Frame(csv, "action_last", at), at);
+            Add(found is [var only] ? only : null, slate);
         }
     }
 
-    private void Add(string? take, string name, Slate slate)
+    private void Add(string? take, TakeSlate slate)
     {
         if (slate.ActionLast < slate.ActionFirst)
         {
-            problems.Add(slate.At, $"the action of '{name}' ends at frame {slate.ActionLast}, before it starts at {slate.ActionFirst}");
+            problems.Add(slate.At, $"the action of '{slate.Take}' ends before it starts");
         }
         else if (take is null)
         {
-            notes.Add($"{problems.File}:{slate.At.Line}: no take '{name}'");
+            notes.Add($"{problems.File}:{slate.At.Line}: no take '{slate.Take}'");
         }
         else if (!slates.TryAdd(take, slate with { Take = take }))
         {
@@ -127,25 +141,24 @@ public sealed class SlateReader
             return null;
         }
 
-        if (int.TryParse(text, NumberStyles.None, CultureInfo.InvariantCulture, out var frame))
+        if (int.TryParse(text, NumberStyles.None, CultureInfo.InvariantCulture, out var frame) && frame >= firstFrame)
         {
-            return frame;
+            return frame - firstFrame;
         }
 
-        problems.Add(at, $"{column} takes a frame number, not '{text}'");
+        problems.Add(at, $"{column} takes a frame number from {firstFrame}, not '{text}'");
         return null;
     }
 
-    private string? Code(CsvReader csv, Place at)
+    private TimeCode? Address(string text, Place at)
     {
-        var text = csv.GetString("timecode");
-        if (text.Length > 0)
+        var address = TimeCode.TryParse(text, rate, out var problem);
+        if (address is null)
         {
-            return text;
+            problems.Add(at, text.Length == 0 ? "the timecode is missing" : problem);
         }
 
-        problems.Add(at, "the timecode is missing");
-        return null;
+        return address;
     }
 
     private static string FirstLine(string text) => text.Split('\n')[0].TrimEnd('\r');

@@ -1,25 +1,24 @@
 using System.Collections.Immutable;
+using MocapClean.Core.Takes;
 
 namespace MocapClean.Cli.Config.Sources;
 
-/// <summary>What a slate says of a take.</summary>
+/// <summary>What a row of slates says of a take; frames count from 0.</summary>
 /// <param name="Take">The take's name, as in <see cref="FoundTake.Name"/>.</param>
-/// <param name="Frame">A frame of the take.</param>
-/// <param name="TimeCode">Its address, as written.</param>
+/// <param name="Slate">The frame whose address is known.</param>
 /// <param name="ActionFirst">The first frame that counts in verdicts, or null for the take's first.</param>
 /// <param name="ActionLast">The last one, or null for the take's last.</param>
 /// <param name="At">Where it stands in its file.</param>
-public sealed record Slate(string Take, int Frame, string TimeCode, int? ActionFirst, int? ActionLast, Place At);
+public sealed record TakeSlate(string Take, Slate Slate, int? ActionFirst, int? ActionLast, Place At);
 
 /// <summary>The slates of a session.</summary>
-/// <param name="File">The file, as a message names it.</param>
 /// <param name="ByTake">Slates by take.</param>
-/// <param name="Notes">One line for each slate whose take was not found.</param>
-public sealed record SlateTable(string File, ImmutableDictionary<string, Slate> ByTake, ImmutableArray<string> Notes)
+/// <param name="Notes">One line for each row whose take was not found.</param>
+public sealed record SlateTable(ImmutableDictionary<string, TakeSlate> ByTake, ImmutableArray<string> Notes)
 {
     /// <summary>No slates at all.</summary>
-    public static SlateTable Empty { get; } = new("", ImmutableDictionary<string, Slate>.Empty, []);
+    public static SlateTable Empty { get; } = new(ImmutableDictionary<string, TakeSlate>.Empty, []);
 
     /// <summary>The slate of a take, or null.</summary>
-    public Slate? For(string take) => ByTake.GetValueOrDefault(take);
+    public TakeSlate? For(string take) => ByTake.GetValueOrDefault(take);
 }
