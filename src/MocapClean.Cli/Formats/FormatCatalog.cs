@@ -8,6 +8,7 @@ public static class FormatCatalog
     /// <summary>In the order in which they are tried.</summary>
     public static ImmutableArray<ITakeFormat> All { get; } =
     [
+        new Csv.CsvFormat(),
     ];
 
     /// <summary>The format of a file by its ending, or null.</summary>
