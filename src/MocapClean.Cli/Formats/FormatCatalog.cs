@@ -9,6 +9,7 @@ public static class FormatCatalog
     public static ImmutableArray<ITakeFormat> All { get; } =
     [
         new Csv.CsvFormat(),
+        new Bvh.BvhFormat(),
     ];
 
     /// <summary>The format of a file by its ending, or null.</summary>

@@ -28,6 +28,9 @@ public sealed record Take
     /// <summary>What ingest and the stages found, in the order found.</summary>
     public ImmutableArray<Finding> Findings { get; init; } = [];
 
+    /// <summary>What the reader has to say about the take as a whole, a sentence each, such as which joints it had to carry and why.</summary>
+    public ImmutableArray<string> Notes { get; init; } = [];
+
     /// <summary>Number of frames.</summary>
     public int Length => Clock.Length;
 }
