@@ -19,18 +19,28 @@ public static class MeanOrientation
     public static Quat Of(ReadOnlySpan<Quat> orientations, ReadOnlySpan<double> weights)
     {
         Check(orientations, weights);
-        var sum = Matrix<double>.Build.Dense(4, 4);
+        var sum = new double[4, 4];
         for (var n = 0; n < orientations.Length; n++)
         {
-            var q = orientations[n].Normalised();
-            var column = Vector<double>.Build.Dense([q.W, q.X, q.Y, q.Z]);
-            sum += (weights.IsEmpty ? 1 : weights[n]) * column.OuterProduct(column);
+            AddOuterProduct(sum, orientations[n].Normalised(), weights.IsEmpty ? 1 : weights[n]);
         }
 
         // Eigenvalues of a symmetric matrix come in rising order.
-        var best = sum.Evd(Symmetricity.Symmetric).EigenVectors.Column(3);
+        var best = Matrix<double>.Build.DenseOfArray(sum).Evd(Symmetricity.Symmetric).EigenVectors.Column(3);
         var mean = new Quat(best[0], best[1], best[2], best[3]).Normalised();
         return Quat.Dot(mean, orientations[0]) < 0 ? -mean : mean;
+    }
+
+    private static void AddOuterProduct(double[,] sum, Quat q, double weight)
+    {
+        ReadOnlySpan<double> components = [q.W, q.X, q.Y, q.Z];
+        for (var row = 0; row < 4; row++)
+        {
+            for (var column = 0; column < 4; column++)
+            {
+                sum[row, column] += weight * components[row] * components[column];
+            }
+        }
     }
 
     private static void Check(ReadOnlySpan<Quat> orientations, ReadOnlySpan<double> weights)

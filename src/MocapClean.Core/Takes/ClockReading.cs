@@ -20,8 +20,9 @@ internal static class ClockReading
             return new Clock { Delivered = [times[0]], Steady = [times[0]], Rate = 1, Rounding = rounding, IsRegular = true };
         }
 
-        var slack = Math.Max(Math.Max(rounding, Finest), Math.Max(Math.BitIncrement(Math.Abs(times[0])) - Math.Abs(times[0]),
-            Math.BitIncrement(Math.Abs(times[^1])) - Math.Abs(times[^1])));
+        // Seconds since 1970 have digits too few for the finest; one wild time at either end says nothing about them.
+        var coarseness = Math.Min(Math.Abs(times[0]), Math.Abs(times[^1]));
+        var slack = Math.Max(Math.Max(rounding, Finest), Math.BitIncrement(coarseness) - coarseness);
         var spacing = Spacing.Measure(times, slack);
         var exact = Meant(spacing.Mean, 2 * slack * spacing.Runs / spacing.Count, NearNominal);
         var fitted = exact?.Interval ?? spacing.Mean;
@@ -107,7 +108,7 @@ internal static class ClockReading
         public static Spacing Measure(ReadOnlySpan<double> times, double slack)
         {
             var median = Median(times);
-            if (!(median > 0))
+            if (!(median > 0 && double.IsFinite(median)))
             {
                 throw new ArgumentException($"no usable time: the median spacing is {median} s", nameof(times));
             }

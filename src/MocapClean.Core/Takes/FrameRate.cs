@@ -39,8 +39,8 @@ public readonly record struct FrameRate
     /// <summary>Seconds between frames as a double.</summary>
     public double Interval => (double)Denominator / Numerator;
 
-    /// <summary>The time of a frame in seconds, rounded once.</summary>
-    public double TimeOf(long frame) => (double)((decimal)frame * Denominator / Numerator);
+    /// <summary>The time of a frame in seconds, rounded once: the product is exact below 2^53, which is ages.</summary>
+    public double TimeOf(long frame) => (double)frame * Denominator / Numerator;
 
     /// <summary>
     /// The fraction that a person means by a number of hertz: a whole number, a television rate where it agrees with one to six digits

@@ -12,7 +12,9 @@ public sealed record Slate(int Frame, TimeCode Address)
     public TimeCode At(Clock clock, int frame)
     {
         ArgumentNullException.ThrowIfNull(clock);
-        var seconds = clock.Steady[frame] - clock.Steady[Frame];
+
+        // A wild time has no address worth having, but it must not break the arithmetic either.
+        var seconds = Math.Clamp(clock.Steady[frame] - clock.Steady[Frame], -1e9, 1e9);
         return clock.ExactRate is { } capture
             ? Address.After((long)Math.Round(seconds * capture.Hertz), capture)
             : Address.After(seconds + clock.Rounding);

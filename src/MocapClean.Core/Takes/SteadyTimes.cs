@@ -11,6 +11,9 @@ internal sealed class SteadyTimes(double measured, FrameRate? exact, double slac
     // A frame whose time does not rise is squeezed in before the next good time, but no tighter than this share of an interval.
     private const double Tightest = 0.4;
 
+    // A time further ahead than so many intervals (a hundred days at 120 Hz) is no time of this take.
+    private const double Wild = 1e9;
+
     // A line through two rounded times can miss the others by twice the rounding.
     private readonly double allowed = exact is null ? 2 * slack : slack;
 
@@ -28,14 +31,17 @@ internal sealed class SteadyTimes(double measured, FrameRate? exact, double slac
     private long[] Ticks(ReadOnlySpan<double> times)
     {
         var ticks = new long[times.Length];
-        var (last, tick, ahead) = (times[0], 0L, 0);
-        for (var n = 1; n < times.Length; n++)
+        var first = FirstBelieved(times);
+        Array.Fill(ticks, -1, 0, first);
+        var (last, tick, ahead) = (times[first], 0L, 0);
+        for (var n = first + 1; n < times.Length; n++)
         {
             var step = times[n] - last;
             var jumps = step > (1.5 * measured) + (2 * slack);
-            if (jumps && n + 1 < times.Length && times[n + 1] < times[n] && times[n + 1] > last)
+            var comesBack = n + 1 < times.Length && times[n + 1] < times[n] && times[n + 1] > last;
+            if (jumps && (comesBack || step > Wild * measured))
             {
-                ticks[n] = -1; // a single time far ahead, and the next one back in place
+                ticks[n] = -1; // far ahead, and the next one back in place
             }
             else if (ClockReading.Stalls(step, measured, slack))
             {
@@ -54,12 +60,19 @@ internal sealed class SteadyTimes(double measured, FrameRate? exact, double slac
             }
             else
             {
-                (last, tick) = (times[n], tick + Math.Max(1, jumps ? (long)Math.Min(Math.Round(step / measured), 1e15) : 1));
+                (last, tick) = (times[n], tick + (jumps ? (long)Math.Round(step / measured) : 1));
                 ticks[n] = tick;
             }
         }
 
         return ticks;
+    }
+
+    /// <summary>Frame 0, or 1 where the clock runs back or leaps ages between the two: then the first time is the wrong one.</summary>
+    private int FirstBelieved(ReadOnlySpan<double> times)
+    {
+        var step = times.Length > 2 ? times[1] - times[0] : measured;
+        return step < -2 * slack || step > Wild * measured ? 1 : 0;
     }
 
     private static int NextAbove(ReadOnlySpan<double> times, double last, int from)
@@ -75,7 +88,7 @@ internal sealed class SteadyTimes(double measured, FrameRate? exact, double slac
     /// <summary>Puts each stretch of frames that agrees with an even grid on it; others keep their delivered times.</summary>
     private void SnapToGrid(ReadOnlySpan<double> times, long[] ticks, double[] steady)
     {
-        for (var first = 0; first < times.Length;)
+        for (var first = FirstBelieved(times); first < times.Length;)
         {
             var (low, high, end) = (double.NegativeInfinity, double.PositiveInfinity, first);
             for (; end < times.Length; end++)
@@ -115,28 +128,28 @@ internal sealed class SteadyTimes(double measured, FrameRate? exact, double slac
     /// <summary>Gives the frames without a tick a time between their neighbours, or one interval on; then all times rise.</summary>
     private void PlaceOthers(long[] ticks, double[] steady)
     {
+        steady[0] = ticks[0] < 0 ? steady[1] - measured : steady[0];
         for (var n = 1; n < steady.Length; n++)
         {
-            if (ticks[n] < 0)
+            var next = n;
+            while (next < steady.Length && ticks[next] < 0)
             {
-                var next = n;
-                while (next < steady.Length && ticks[next] < 0)
-                {
-                    next++;
-                }
+                next++;
+            }
 
-                var room = next < steady.Length ? (steady[next] - steady[n - 1]) / (next - n + 1) : measured;
-                var step = room >= 0.9 * Tightest * measured ? Math.Min(room, measured) : measured;
-                for (; n < next; n++)
-                {
-                    steady[n] = steady[n - 1] + step;
-                }
+            var room = next < steady.Length ? (steady[next] - steady[n - 1]) / (next - n + 1) : measured;
+            var step = room >= 0.9 * Tightest * measured ? Math.Min(room, measured) : measured;
+            for (; n < next; n++)
+            {
+                steady[n] = Later(steady[n - 1], step);
             }
 
             if (n < steady.Length && steady[n] <= steady[n - 1])
             {
-                steady[n] = steady[n - 1] + measured;
+                steady[n] = Later(steady[n - 1], measured);
             }
         }
     }
+
+    private static double Later(double time, double step) => Math.Max(time + step, Math.BitIncrement(time));
 }

@@ -119,6 +119,37 @@ public sealed class ClockTimesTests
         Assert.All(Enumerable.Range(0, 7), n => Assert.Equal(0.01 * n, clock.Steady[n], 1e-12));
     }
 
+    [Theory]
+    [InlineData(1e300)]
+    [InlineData(double.MaxValue)]
+    [InlineData(-1e300)]
+    public void Wild_times_at_the_ends_or_inside_change_no_rate(double wild)
+    {
+        foreach (var at in new[] { 0, 3, 49, 99 })
+        {
+            double[] times = [.. Enumerable.Range(0, 100).Select(n => n == at || (at > 0 && n == at - 1) ? wild : n / 50.0)];
+
+            var clock = Clock.FromTimes(times, 1e-6);
+
+            Assert.Equal(new FrameRate(50, 1), clock.ExactRate);
+            Assert.Equal(times, clock.Delivered);
+            Assert.All(Enumerable.Range(0, 100), n => Assert.Equal(n / 50.0, clock.Steady[n], 1e-12));
+            var address = new Slate(at, new TimeCode(TimeCodeRate.Find(25, dropFrame: false)!, 0)).At(clock, 50);
+            Assert.InRange(address.Frame, 0, address.Rate.FramesADay - 1);
+        }
+    }
+
+    [Fact]
+    public void Seconds_since_1970_keep_their_exact_grid()
+    {
+        double[] times = [.. Enumerable.Range(0, 1000).Select(n => 1.7e9 + (n / 120.0))];
+
+        var clock = Clock.FromTimes(times, 0);
+
+        Assert.Equal(new FrameRate(120, 1), clock.ExactRate);
+        Assert.True(clock.IsRegular);
+    }
+
     [Fact]
     public void A_clock_that_starts_again_is_counted_on()
     {
