@@ -17,8 +17,6 @@ internal struct Corridor
     private Vector256<double> highB;
     private Vector256<double> boxLow;
     private Vector256<double> boxHigh;
-    private Vector256<double> pointA;
-    private Vector256<double> pointB;
 
     /// <summary>A corridor that allows everything.</summary>
     public static Corridor Open
@@ -37,38 +35,50 @@ internal struct Corridor
         get => (Vector256.GreaterThan(lowA, highA) | Vector256.GreaterThan(lowB, highB)).ExtractMostSignificantBits() != 0;
     }
 
-    /// <summary>Looks at one velocity: the centre of a frame's ball. The questions below are about it.</summary>
+    /// <summary>Whether a velocity is refuted by a frame so far.</summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    public void Look(double x, double y, double z)
-    {
-        var (vx, vy, vz) = (Vector256.Create(x), Vector256.Create(y), Vector256.Create(z));
-        pointA = (vx * Vector256.Create(1, 0, 0, D)) + (vy * Vector256.Create(0, 1, 0, D)) + (vz * Vector256.Create(0, 0, 1, D));
-        pointB = (vx * Vector256.Create(-D, D, D, 1)) + (vy * Vector256.Create(D, -D, D, 0)) + (vz * Vector256.Create(D, D, -D, 0));
-    }
+    public readonly bool Refutes(in Reading velocity) =>
+        (Vector256.LessThan(velocity.A, lowA) | Vector256.GreaterThan(velocity.A, highA) |
+         Vector256.LessThan(velocity.B, lowB) | Vector256.GreaterThan(velocity.B, highB)).ExtractMostSignificantBits() != 0;
 
-    /// <summary>Whether the velocity looked at is refuted by a frame so far.</summary>
+    /// <summary>Whether a velocity suits every frame so far, for sure.</summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    public readonly bool Refutes() =>
-        (Vector256.LessThan(pointA, lowA) | Vector256.GreaterThan(pointA, highA) |
-         Vector256.LessThan(pointB, lowB) | Vector256.GreaterThan(pointB, highB)).ExtractMostSignificantBits() != 0;
+    public readonly bool Accepts(in Reading velocity) =>
+        ((Vector256.LessThan(velocity.A, boxLow) | Vector256.GreaterThan(velocity.A, boxHigh)).ExtractMostSignificantBits() & 7) == 0;
 
-    /// <summary>Whether the velocity looked at suits every frame so far, for sure.</summary>
-    [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    public readonly bool Accepts() =>
-        ((Vector256.LessThan(pointA, boxLow) | Vector256.GreaterThan(pointA, boxHigh)).ExtractMostSignificantBits() & 7) == 0;
-
-    /// <summary>Puts in the ball about the velocity looked at.</summary>
+    /// <summary>Puts in the ball of a frame.</summary>
+    /// <param name="centre">Its centre.</param>
     /// <param name="outer">Necessary radius.</param>
     /// <param name="inner">Half the side of the cube inside the sufficient ball; negative where there is none.</param>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    public void Narrow(double outer, double inner)
+    public void Narrow(in Reading centre, double outer, double inner)
     {
         var (radius, side) = (Vector256.Create(outer), Vector256.Create(inner));
-        lowA = Vector256.MaxNative(lowA, pointA - radius);
-        highA = Vector256.MinNative(highA, pointA + radius);
-        lowB = Vector256.MaxNative(lowB, pointB - radius);
-        highB = Vector256.MinNative(highB, pointB + radius);
-        boxLow = Vector256.MaxNative(boxLow, pointA - side);
-        boxHigh = Vector256.MinNative(boxHigh, pointA + side);
+        lowA = Vector256.MaxNative(lowA, centre.A - radius);
+        highA = Vector256.MinNative(highA, centre.A + radius);
+        lowB = Vector256.MaxNative(lowB, centre.B - radius);
+        highB = Vector256.MinNative(highB, centre.B + radius);
+        boxLow = Vector256.MaxNative(boxLow, centre.A - side);
+        boxHigh = Vector256.MinNative(boxHigh, centre.A + side);
+    }
+
+    /// <summary>Leaves nothing.</summary>
+    public void Close() =>
+        (lowA, highA) = (Vector256.Create(double.PositiveInfinity), Vector256.Create(double.NegativeInfinity));
+
+    /// <summary>A velocity read along the seven directions.</summary>
+    public readonly struct Reading
+    {
+        /// <summary>Along three axes and the first diagonal; along the other diagonals and the first axis again.</summary>
+        public readonly Vector256<double> A, B;
+
+        /// <summary>Reads a velocity, radians a second.</summary>
+        [MethodImpl(MethodImplOptions.AggressiveInlining)]
+        public Reading(double x, double y, double z)
+        {
+            var (vx, vy, vz) = (Vector256.Create(x), Vector256.Create(y), Vector256.Create(z));
+            A = (vx * Vector256.Create(1, 0, 0, D)) + (vy * Vector256.Create(0, 1, 0, D)) + (vz * Vector256.Create(0, 0, 1, D));
+            B = (vx * Vector256.Create(-D, D, D, 1)) + (vy * Vector256.Create(D, -D, D, 0)) + (vz * Vector256.Create(D, D, -D, 0));
+        }
     }
 }

@@ -1,5 +1,6 @@
 using System.Buffers;
 using System.Runtime.CompilerServices;
+using System.Runtime.Intrinsics;
 
 namespace MocapClean.Core.Stages.Reduce;
 
@@ -9,41 +10,53 @@ namespace MocapClean.Core.Stages.Reduce;
 /// </summary>
 /// <remarks>
 /// Breadth first: all frames that k keys reach, then all that k + 1 keys reach, each level searched from its latest frame back; a frame is
-/// marked once, by the first to reach it. Sources: Imai and Iri 1988, Chan and Chin 1996 (fewest vertices within a tolerance).
+/// marked once, by the first to reach it. Most keys of a level add nothing to what later ones reached, and a few frames spread before the
+/// first unmarked one show it. Only where an end survives those are all frames between looked at.
+/// Sources: Imai and Iri 1988, Chan and Chin 1996 (fewest vertices within a tolerance).
 /// </remarks>
 internal sealed class KeySearch<TCurve> : IDisposable
     where TCurve : struct, ICurve<TCurve>
 {
+    /// <summary>Spans up to this long are looked at whole at once; longer ones by spread frames first.</summary>
+    private const int Short = 8;
+
     private readonly Stretch stretch;
-    private readonly SpanLimits limits;
+    private readonly FrameMarks marks;
+    private readonly int[] latest;
     private readonly double tolerance;
+    private readonly double widest;
     private readonly double chord;
     private readonly double cosWidest;
     private readonly double cosHopeless;
+    private readonly Suspects suspects = new();
 
-    // For each frame the key before it, the next unmarked frame at or after it, the last frame that is not too late; and the marked frames.
-    private readonly int[] before;
-    private readonly int[] unmarked;
-    private readonly int[] marked;
-    private int count;
-    private int suspect;
+    // What is known from the key at work: the balls of frames, what they leave, and whether every frame before the first unmarked is in.
+    private VelocityBalls balls;
+    private Corridor corridor;
+    private bool isWhole;
+    private int spent;
 
     private KeySearch(Stretch stretch, SpanLimits limits)
     {
         this.stretch = stretch;
-        this.limits = limits;
+        marks = new FrameMarks(stretch.Count);
         // A hair less than asked for, so that the rounding of the written keys cannot pass it.
         const double Hair = 1 - 1e-9;
         tolerance = limits.Tolerance * Hair;
+        widest = limits.Widest * Hair;
         chord = SpanCheck.SquaredChord(tolerance);
-        cosWidest = Math.Cos(limits.Widest * Hair / 2);
+        cosWidest = Math.Cos(widest / 2);
+        // A frame turned further than the widest key and the tolerance: playback that never turns back cannot pass it and return.
         cosHopeless = Math.Cos(Math.Min(Math.PI, limits.Widest + limits.Tolerance) / 2) - 1e-9;
-        before = ArrayPool<int>.Shared.Rent(stretch.Count);
-        unmarked = ArrayPool<int>.Shared.Rent(stretch.Count + 1);
-        marked = ArrayPool<int>.Shared.Rent(stretch.Count);
-        for (var n = 0; n <= stretch.Count; n++)
+        latest = ArrayPool<int>.Shared.Rent(stretch.Count);
+        for (var (n, end) = (0, 0); n < stretch.Count; n++)
         {
-            unmarked[n] = n;
+            while (end + 1 < stretch.Count && stretch.Time[end + 1] - stretch.Time[n] <= limits.Longest)
+            {
+                end++;
+            }
+
+            latest[n] = end;
         }
     }
 
@@ -51,74 +64,42 @@ internal sealed class KeySearch<TCurve> : IDisposable
     public static List<int> Run(Stretch stretch, SpanLimits limits)
     {
         using var search = new KeySearch<TCurve>(stretch, limits);
-        search.Mark(0, -1);
-        for (var (from, to) = (0, 1); search.unmarked[stretch.Count - 1] == stretch.Count - 1; (from, to) = (to, search.count))
-        {
-            search.marked.AsSpan(from, to - from).Sort();
-            for (var at = to - 1; at >= from; at--)
-            {
-                search.Reach(search.marked[at]);
-            }
-        }
-
         return search.Path();
     }
 
     /// <inheritdoc/>
     public void Dispose()
     {
-        ArrayPool<int>.Shared.Return(before);
-        ArrayPool<int>.Shared.Return(unmarked);
-        ArrayPool<int>.Shared.Return(marked);
+        marks.Dispose();
+        ArrayPool<int>.Shared.Return(latest);
     }
 
     private List<int> Path()
     {
-        var path = new List<int>();
-        for (var n = stretch.Count - 1; n >= 0; n = before[n])
+        marks.Mark(0, -1);
+        for (var (from, to) = (0, 1); !marks.Contains(stretch.Count - 1); (from, to) = (to, marks.Count))
         {
-            path.Add(n);
+            var level = marks.Rising(from, to);
+            for (var at = level.Length - 1; at >= 0; at--)
+            {
+                Reach(level[at]);
+            }
         }
 
-        path.Reverse();
-        return path;
-    }
-
-    private void Mark(int frame, int from)
-    {
-        before[frame] = from;
-        unmarked[frame] = frame + 1;
-        marked[count++] = frame;
-    }
-
-    /// <summary>The first unmarked frame at or after the given one; the number of frames where there is none. Shortens the way it went.</summary>
-    private int Unmarked(int frame)
-    {
-        var end = frame;
-        while (unmarked[end] != end)
-        {
-            end = unmarked[end];
-        }
-
-        while (unmarked[frame] != end)
-        {
-            (frame, unmarked[frame]) = (unmarked[frame], end);
-        }
-
-        return end;
+        return marks.Path();
     }
 
     /// <summary>Marks every unmarked frame that one span from this key reaches.</summary>
     private void Reach(int key)
     {
-        var first = Unmarked(key + 1);
+        var first = marks.Unmarked(key + 1);
         if (first == key + 1 && first < stretch.Count)
         {
-            Mark(first, key);
-            first = Unmarked(first);
+            marks.Mark(first, key);
+            first = marks.Unmarked(first);
         }
 
-        if (first < stretch.Count && stretch.Time[first] - stretch.Time[key] <= limits.Longest)
+        if (first <= latest[key])
         {
             Scan(key, first);
         }
@@ -127,29 +108,37 @@ internal sealed class KeySearch<TCurve> : IDisposable
     [MethodImpl(MethodImplOptions.AggressiveOptimization)]
     private void Scan(int key, int first)
     {
-        var stray = TCurve.Stray(limits.Widest);
-        var balls = new VelocityBalls(stretch, key, tolerance + stray, tolerance - stray);
-        var corridor = Corridor.Open;
+        var (last, stray) = (latest[key], TCurve.Stray(widest));
+        if (stray > 0)
+        {
+            (last, stray) = Horizon(key, first, stray);
+        }
+
+        Begin(key, stray);
+        if (last < first || !Survey(key, first))
+        {
+            return;
+        }
+
         FourBalls four = default;
-        var until = stretch.Time[key] + limits.Longest;
-        for (var block = key + 1; block < stretch.Count; block += 4)
+        for (var block = first; block <= last; block += 4)
         {
             balls.Of(stretch.Four(block), stretch.Times(block), ref four);
-            for (var k = 0; k < 4 && block + k < stretch.Count; k++)
+            for (var (n, k) = (block, 0); k < 4 && n <= last; n++, k++)
             {
-                var n = block + k;
-                if (stretch.Time[n] > until || Math.Abs(four.Facing[k]) < cosHopeless)
+                if (Math.Abs(four.Facing[k]) < cosHopeless)
                 {
                     return;
                 }
 
-                corridor.Look(four.X[k], four.Y[k], four.Z[k]);
-                if (n >= first && unmarked[n] == n && TCurve.CosHalfTurn(four.Facing[k]) >= cosWidest && Plays(corridor, key, n))
+                var velocity = four.Centre(k);
+                if (!marks.Contains(n) && TCurve.CosHalfTurn(four.Facing[k]) >= cosWidest &&
+                    !corridor.Refutes(velocity) && Plays(key, first, n, velocity))
                 {
-                    Mark(n, key);
+                    marks.Mark(n, key);
                 }
 
-                corridor.Narrow(four.Outer[k], four.Inner[k]);
+                corridor.Narrow(velocity, four.Outer[k], four.Inner[k]);
                 if (corridor.IsEmpty)
                 {
                     return;
@@ -158,20 +147,132 @@ internal sealed class KeySearch<TCurve> : IDisposable
         }
     }
 
-    private bool Plays(in Corridor corridor, int key, int end)
+    private void Begin(int key, double stray)
     {
-        if (corridor.Refutes())
+        balls = new VelocityBalls(stretch, key, tolerance + stray, tolerance - stray);
+        corridor = Corridor.Open;
+        (isWhole, spent) = (false, 0);
+    }
+
+    /// <summary>
+    /// For a playback that strays from constant speed: no end after the frame returned is possible, and how far playback to any end up to
+    /// it can stray. With the widest stray allowed, frames ever further out are put in until nothing is left.
+    /// </summary>
+    private (int Last, double Stray) Horizon(int key, int first, double stray)
+    {
+        Begin(key, stray);
+        var last = latest[key];
+        var step = Math.Max(1, (first - key) / 8);
+        var (a, b, c, d) = (key + ((first - key + 3) / 4), key + ((first - key + 1) / 2), key + (3 * (first - key) / 4), first);
+        var isOpen = Put(a, b, c, d);
+        for (; isOpen && d < last; step *= 2)
+        {
+            (a, b, c, d) = (Math.Min(last, d + step), Math.Min(last, d + (2 * step)), Math.Min(last, d + (3 * step)), Math.Min(last, d + (4 * step)));
+            isOpen = Put(a, b, c, d);
+        }
+
+        last = isOpen ? last : d - 1;
+        var least = Vector256<double>.One;
+        for (var n = first; n <= last; n += 4)
+        {
+            least = Vector256.MinNative(least, Vector256.Abs(balls.Facing(stretch.Four(n))));
+        }
+
+        var cosine = Math.Min(Math.Min(least[0], least[1]), Math.Min(least[2], least[3]));
+        return (last, TCurve.Stray(Math.Min(widest, 2 * Math.Acos(Math.Min(1, cosine)))));
+    }
+
+    /// <summary>
+    /// Puts in frames before the first unmarked one: all of a short span, else frames spread over it, ever closer to its ends. False as
+    /// soon as nothing is left.
+    /// </summary>
+    private bool Survey(int key, int first)
+    {
+        var length = first - key;
+        if (length <= Short)
+        {
+            return Fill(key, first);
+        }
+
+        if (!Put(first - 1, key + (length / 2), key + (3 * length / 4), key + (length / 4)))
         {
             return false;
         }
 
-        if (corridor.Accepts())
+        for (var step = length / 8; step > 0; step /= 2)
+        {
+            if (!Put(first - step, key + step, first - (3 * step), key + (3 * step)))
+            {
+                return false;
+            }
+        }
+
+        return true;
+    }
+
+    /// <summary>Puts in all frames between the key and the first unmarked frame. False as soon as nothing is left.</summary>
+    private bool Fill(int key, int first)
+    {
+        isWhole = true;
+        for (var block = key + 1; block < first; block += 4)
+        {
+            if (!Put(block, Math.Min(block + 1, first - 1), Math.Min(block + 2, first - 1), Math.Min(block + 3, first - 1)))
+            {
+                return false;
+            }
+        }
+
+        return true;
+    }
+
+    /// <summary>Puts in four frames. False where nothing is left, or where one of them cannot be passed.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
+    private bool Put(int a, int b, int c, int d)
+    {
+        FourBalls four = default;
+        balls.Of(stretch.Four(a, b, c, d), stretch.Times(a, b, c, d), ref four);
+        for (var k = 0; k < 4; k++)
+        {
+            corridor.Narrow(four.Centre(k), four.Outer[k], four.Inner[k]);
+        }
+
+        if (Vector256.LessThanAny(Vector256.Abs(four.Facing), Vector256.Create(cosHopeless)))
+        {
+            corridor.Close();
+        }
+
+        return !corridor.IsEmpty;
+    }
+
+    /// <summary>
+    /// Whether the span from the key to an end that the corridor does not refute plays within the tolerance. Once playing has cost as much
+    /// as looking at all frames would, they are looked at: then many ends need not be played.
+    /// </summary>
+    private bool Plays(int key, int first, int end, in Corridor.Reading velocity)
+    {
+        if (!isWhole && spent > first - key && (!Fill(key, first) || corridor.Refutes(velocity)))
+        {
+            return false;
+        }
+
+        if (isWhole && corridor.Accepts(velocity))
         {
             return true;
         }
 
-        var breach = SpanCheck.Breach<TCurve>(stretch, key, end, chord, suspect);
-        suspect = breach < 0 ? suspect : breach;
-        return breach < 0;
+        var breach = SpanCheck.Breach<TCurve>(stretch, key, end, chord, suspects);
+        if (breach < 0)
+        {
+            spent += end - key;
+            return true;
+        }
+
+        spent += suspects.Add(breach) ? Short : breach - key;
+        if (breach < first && !isWhole)
+        {
+            Put(breach, Math.Min(breach + 1, first - 1), Math.Min(breach + 2, first - 1), Math.Min(breach + 3, first - 1));
+        }
+
+        return false;
     }
 }

@@ -22,23 +22,35 @@ internal static class SpanCheck
     /// <param name="first">First key.</param>
     /// <param name="last">Second key, after the first.</param>
     /// <param name="limit">Largest squared chord.</param>
-    /// <param name="suspect">A frame to try first; one that is not inside the span is not tried.</param>
+    /// <param name="suspects">Frames to try first; those not inside the span are passed over.</param>
     [MethodImpl(MethodImplOptions.AggressiveOptimization)]
-    public static int Breach<TCurve>(Stretch stretch, int first, int last, double limit, int suspect)
+    public static int Breach<TCurve>(Stretch stretch, int first, int last, double limit, Suspects suspects)
         where TCurve : struct, ICurve<TCurve>
     {
+        if (last - first < 2)
+        {
+            return -1;
+        }
+
         var curve = TCurve.Through(stretch, first, last);
         var most = Vector256.Create(limit);
-        if (suspect > first && suspect < last && Beyond(stretch, curve, most, suspect, last) is var at and >= 0)
+        for (var k = 0; k < Suspects.Count; k += 4)
         {
-            return at;
+            var (a, b) = (suspects.Inside(k, first, last), suspects.Inside(k + 1, first, last));
+            var (c, d) = (suspects.Inside(k + 2, first, last), suspects.Inside(k + 3, first, last));
+            var found = Beyond(curve, stretch.Times(a, b, c, d), stretch.Four(a, b, c, d), most);
+            if (found != 0)
+            {
+                return BitOperations.TrailingZeroCount(found) switch { 0 => a, 1 => b, 2 => c, _ => d };
+            }
         }
 
         for (var n = first + 1; n < last; n += 4)
         {
-            if (Beyond(stretch, curve, most, n, last) is var found and >= 0)
+            var bits = Beyond(curve, stretch.Times(n), stretch.Four(n), most) & (last - n < 4 ? (1u << (last - n)) - 1 : 15);
+            if (bits != 0)
             {
-                return found;
+                return n + BitOperations.TrailingZeroCount(bits);
             }
         }
 
@@ -46,12 +58,7 @@ internal static class SpanCheck
     }
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    private static int Beyond<TCurve>(Stretch stretch, in TCurve curve, Vector256<double> most, int n, int last)
-        where TCurve : struct, ICurve<TCurve>
-    {
-        var chords = curve.SquaredChords(stretch.Times(n), stretch.Four(n));
-        var bits = Vector256.GreaterThan(chords, most).ExtractMostSignificantBits();
-        bits &= last - n < 4 ? (1u << (last - n)) - 1 : 15;
-        return bits == 0 ? -1 : n + BitOperations.TrailingZeroCount(bits);
-    }
+    private static uint Beyond<TCurve>(in TCurve curve, Vector256<double> times, in FourQuats samples, Vector256<double> most)
+        where TCurve : struct, ICurve<TCurve> =>
+        Vector256.GreaterThan(curve.SquaredChords(times, samples), most).ExtractMostSignificantBits();
 }

@@ -38,11 +38,15 @@ internal readonly struct VelocityBalls
         this.enough = Vector256.Create((enough - (2 * LogError)) / Sqrt3);
     }
 
+    /// <summary>Inner products of the key and four frames.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    public Vector256<double> Facing(in FourQuats q) => (w * q.W) + (x * q.X) + (y * q.Y) + (z * q.Z);
+
     /// <summary>The balls of four frames.</summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     public void Of(in FourQuats q, Vector256<double> times, ref FourBalls balls)
     {
-        var dot = (w * q.W) + (x * q.X) + (y * q.Y) + (z * q.Z);
+        var dot = Facing(q);
         // The short way round: all components of key* q take the sign of its w.
         var sign = dot & Vector256.Create(-0.0);
         var facing = dot ^ sign;
@@ -101,4 +105,8 @@ internal struct FourBalls
 
     /// <summary>Inner products of the key and the frames: the cosine of half the turn, with the sign as written.</summary>
     public Vector256<double> Facing;
+
+    /// <summary>The centre of one of the four, read along the directions of a corridor.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    public readonly Corridor.Reading Centre(int k) => new(X[k], Y[k], Z[k]);
 }

@@ -72,6 +72,6 @@ public sealed class KeyPlaybackTests
         Angle.Between(KeyPlayback.At(rule, samples[0], samples[^1], times[n] / times[^1]), samples[n]);
 
     private static int Breach(Playback rule, Stretch stretch, int last, double angle) => rule == Playback.Slerp
-        ? SpanCheck.Breach<SlerpCurve>(stretch, 0, last, SpanCheck.SquaredChord(angle), -1)
-        : SpanCheck.Breach<ChordCurve>(stretch, 0, last, SpanCheck.SquaredChord(angle), -1);
+        ? SpanCheck.Breach<SlerpCurve>(stretch, 0, last, SpanCheck.SquaredChord(angle), new Suspects())
+        : SpanCheck.Breach<ChordCurve>(stretch, 0, last, SpanCheck.SquaredChord(angle), new Suspects());
 }
