@@ -11,9 +11,10 @@ namespace MocapClean.Core.Diff;
 public sealed record JointTrouble(string Joint, int Takes, int TakesWithBadFrames, int BadFrames, int MendedSamples)
 {
     /// <summary>Trouble by joint, the worst first; joints without any left out.</summary>
-    public static ImmutableArray<JointTrouble> Across(IEnumerable<TakeDiff> takes) =>
+    /// <param name="joints">One for each joint of each take: its name, bad frames and mended samples.</param>
+    public static ImmutableArray<JointTrouble> Across(IEnumerable<(string Joint, int BadFrames, int Mended)> joints) =>
     [
-        .. takes.SelectMany(t => t.Joints).GroupBy(j => j.Name, StringComparer.Ordinal)
+        .. joints.GroupBy(j => j.Joint, StringComparer.Ordinal)
             .Select(g => new JointTrouble(g.Key, g.Count(), g.Count(j => j.BadFrames > 0), g.Sum(j => j.BadFrames), g.Sum(j => j.Mended)))
             .Where(t => t.BadFrames + t.MendedSamples > 0)
             .OrderByDescending(t => t.TakesWithBadFrames).ThenByDescending(t => t.BadFrames).ThenByDescending(t => t.MendedSamples)

@@ -6,22 +6,17 @@ namespace MocapClean.Core.Stages.Ingest;
 /// <summary>Finds where the delivered time skips, stands still or runs back. Rows of the whole take.</summary>
 internal static class ClockFaults
 {
-    /// <summary>A spacing above one and a half intervals cannot be rounding or jitter of one: at least one frame is lost.</summary>
-    private const double LostAbove = 1.5;
-
     public static ImmutableArray<Finding> Find(Clock clock)
     {
         var found = ImmutableArray.CreateBuilder<Finding>();
         for (var n = 1; n < clock.Length && !clock.IsRegular; n++)
         {
-            var spacing = clock.Delivered[n] - clock.Delivered[n - 1];
-            if (spacing <= 0)
+            if (!clock.Rises(n))
             {
-                Stands(found, n, spacing);
+                Stands(found, n, clock.Delivered[n] - clock.Delivered[n - 1]);
             }
-            else if (spacing * clock.Rate > LostAbove)
+            else if (clock.Lost(n) is > 0 and var lost)
             {
-                var lost = Math.Max(1, (long)Math.Round(spacing * clock.Rate) - 1);
                 found.Add(Row(n, FaultKind.LostFrames, FaultAction.Left, $"{lost} {(lost == 1 ? "frame" : "frames")} lost before this one") with { Lost = lost });
             }
         }
