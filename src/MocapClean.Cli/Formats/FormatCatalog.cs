@@ -12,6 +12,9 @@ public static class FormatCatalog
         new Bvh.BvhFormat(),
     ];
 
+    /// <summary>The endings that are read, for messages.</summary>
+    public static string Endings => string.Join(", ", All.SelectMany(f => f.Extensions));
+
     /// <summary>The format of a file by its ending, or null.</summary>
     public static ITakeFormat? For(string path) =>
         All.FirstOrDefault(f => f.Extensions.Any(e => path.EndsWith(e, StringComparison.OrdinalIgnoreCase)));
