@@ -1,1 +1,3 @@
-return 0;
+using MocapClean.Cli.Commands;
+
+return CommandLine.Run(args);

@@ -1,0 +1,69 @@
+using MocapClean.Cli.Report;
+
+namespace MocapClean.Cli.Commands;
+
+/// <summary>What a run prints: a line as each take ends, and at the end what the floor needs.</summary>
+internal static class RunSummary
+{
+    private const int MostWindows = 40;
+
+    /// <summary>Name, verdict, worst finding, time code.</summary>
+    public static string Line(TakeSummary take, bool kept)
+    {
+        var worst = take.WorstFinding.Length > 0 ? $"  {take.WorstFinding}" : "";
+        var at = take.WorstTimecode.Length > 0 ? $" at {take.WorstTimecode}" : "";
+        return $"{take.Take}  {take.Verdict}{worst}{at}{(kept ? "  (done earlier)" : "")}";
+    }
+
+    /// <summary>The re-shoot list, counts of verdicts, what failed, where the report lies.</summary>
+    public static void Print(Terminal terminal, SessionReport report, string closing)
+    {
+        terminal.Result("");
+        PrintWindows(terminal, report);
+        foreach (var failed in report.Takes.Where(t => t.Failure is not null))
+        {
+            terminal.Result($"not processed: {failed.Failure}");
+        }
+
+        PrintNames(terminal, "not run", report.NotRun);
+        PrintNames(terminal, "out of date", report.Stale);
+        PrintNames(terminal, "left over in the output folder", report.Leftovers);
+        var changed = report.Takes.Where(t => t.Failure is null).ToList();
+        terminal.Result(
+            $"samples: {changed.Sum(t => t.Samples.Identical)} kept to the byte, {changed.Sum(t => t.Samples.Rewritten)} same orientation rewritten, "
+            + $"{changed.Sum(t => t.Samples.Smoothed)} smoothed (by at most {changed.Select(t => t.Samples.LargestSmoothingDeg ?? 0).DefaultIfEmpty().Max():0.###} deg), "
+            + $"{changed.Sum(t => t.Samples.Mended)} mended, {changed.Sum(t => t.Samples.Missing)} missing; {changed.Sum(t => t.Keys.Count)} keys");
+        terminal.Result("verdicts: " + string.Join(", ", report.Verdicts.Where(v => v.Takes > 0).Select(v => $"{v.Takes} {v.Verdict}")));
+        terminal.Result(closing);
+    }
+
+    private static void PrintWindows(Terminal terminal, SessionReport report)
+    {
+        var rows = report.MostUrgentFirst().SelectMany(t => t.Windows.Select(w => (Take: t, Window: w))).ToList();
+        if (rows.Count == 0)
+        {
+            terminal.Result("nothing to shoot again or to look at first");
+            return;
+        }
+
+        terminal.Result("to shoot again or to look at first (suggestions; for a stunt the coordinator's and the performer's call):");
+        foreach (var (take, w) in rows.Take(MostWindows))
+        {
+            var code = w.FirstTimecode.Length > 0 ? $"  {w.FirstTimecode} to {w.LastTimecode}" : "";
+            terminal.Result($"  {take.Verdict,-10} {take.Take}  frames {w.FirstFrame} to {w.LastFrame}{code}  {w.Reason}");
+        }
+
+        if (rows.Count > MostWindows)
+        {
+            terminal.Result($"  and {rows.Count - MostWindows} more in reshoot.csv");
+        }
+    }
+
+    private static void PrintNames(Terminal terminal, string what, IReadOnlyList<string> names)
+    {
+        if (names.Count > 0)
+        {
+            terminal.Result($"{what}: {string.Join(", ", names.Take(10))}{(names.Count > 10 ? $" and {names.Count - 10} more" : "")}");
+        }
+    }
+}
