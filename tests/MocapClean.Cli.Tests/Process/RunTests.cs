@@ -1,0 +1,164 @@
+using System.Text.Json;
+using MocapClean.Cli.Batch;
+using MocapClean.Cli.Demo;
+using MocapClean.Cli.Tests.Support;
+using Xunit;
+
+namespace MocapClean.Cli.Tests.Process;
+
+/// <summary>The main job through the real process, on the invented session.</summary>
+public sealed class RunTests : IDisposable
+{
+    private readonly TempFolder folder = new();
+
+    public RunTests() => DemoSession.Write(new FolderOutput(folder["demo"]), seed: 7);
+
+    public void Dispose() => folder.Dispose();
+
+    [Fact]
+    public void Every_take_gets_its_outputs_and_the_source_is_left_alone()
+    {
+        var before = folder.Content("demo");
+        var result = Tool.Run("run", folder["demo/session.yaml"], "--out", folder["out"]);
+        Assert.True(result.Code == 0, result.Error);
+        Assert.Equal(before, folder.Content("demo"));
+        foreach (var take in before.Keys.Where(k => k.StartsWith("takes/", StringComparison.Ordinal)).Select(k => k["takes/".Length..]))
+        {
+            Assert.True(File.Exists(folder[$"out/takes/{take}"]), take);
+            Assert.True(File.Exists(folder[$"out/keys/{take}.keys.csv"]), take);
+            Assert.True(File.Exists(folder[$"out/reports/{take}.diff.csv"]), take);
+            Assert.True(File.Exists(folder[$"out/reports/{take}.diff.json"]), take);
+            Assert.Contains(take, result.Output, StringComparison.Ordinal);
+        }
+
+        using var session = JsonDocument.Parse(File.ReadAllText(folder["out/session.json"]));
+        Assert.Equal(6, session.RootElement.GetProperty("takes").GetArrayLength());
+        Assert.Contains("14:21:", File.ReadAllText(folder["out/reshoot.csv"]), StringComparison.Ordinal);
+        Assert.Empty(Directory.GetFiles(folder["out"], "*" + FolderOutput.Unfinished, SearchOption.AllDirectories));
+    }
+
+    [Fact]
+    public void Outputs_are_the_same_bytes_for_any_workers_locale_time_zone_and_for_resumed_runs()
+    {
+        var config = folder["demo/session.yaml"];
+        Assert.Equal(0, Tool.Run("run", config, "--out", folder["one"], "--workers", "1").Code);
+        var elsewhere = new Dictionary<string, string> { ["LANG"] = "de_DE.UTF-8", ["LC_ALL"] = "de_DE.UTF-8", ["TZ"] = "Pacific/Chatham" };
+        Assert.Equal(0, Tool.Run(elsewhere, "run", config, "--out", folder["two"], "--workers", "3").Code);
+        Assert.Equal(0, Tool.Run("run", config, "--out", folder["three"], "--only", "yard/**").Code);
+        Assert.Equal(0, Tool.Run("run", config, "--out", folder["three"], "--only", "shed/**").Code);
+        var one = folder.Content("one");
+        Same(one, folder.Content("two"));
+        Same(one, folder.Content("three"));
+    }
+
+    [Fact]
+    public void A_second_run_does_only_what_is_new_or_changed()
+    {
+        var config = folder["demo/session.yaml"];
+        Tool.Run("run", config, "--out", folder["out"]);
+        var first = folder.Content("out");
+        Assert.Equal(6, Count(Tool.Run("run", config, "--out", folder["out"]).Output, "(done earlier)"));
+        File.Delete(folder["out/takes/yard/lantern-walk_01.csv"]);
+        File.AppendAllText(folder["out/reports/shed/quiet-hold_02.csv.diff.csv"], "x");
+        Assert.Equal(4, Count(Tool.Run("run", config, "--out", folder["out"]).Output, "(done earlier)"));
+        Same(first, folder.Content("out"));
+        Assert.Equal(0, Count(Tool.Run("run", config, "--out", folder["out"], "--fresh").Output, "(done earlier)"));
+        Same(first, folder.Content("out"));
+    }
+
+    [Fact]
+    public void A_torn_journal_line_and_half_written_files_are_survived()
+    {
+        var config = folder["demo/session.yaml"];
+        Tool.Run("run", config, "--out", folder["out"]);
+        var first = folder.Content("out");
+        var journal = folder["out/log/journal.jsonl"];
+        File.WriteAllBytes(journal, File.ReadAllBytes(journal)[..^40]);
+        folder.Put("out/takes/yard/lantern-walk_01.csv" + FolderOutput.Unfinished, "half");
+        Assert.Equal(5, Count(Tool.Run("run", config, "--out", folder["out"]).Output, "(done earlier)"));
+        Same(first, folder.Content("out"));
+    }
+
+    [Fact]
+    public void Only_does_not_shrink_the_session_report_and_leftovers_are_named()
+    {
+        var config = folder["demo/session.yaml"];
+        Tool.Run("run", config, "--out", folder["out"]);
+        folder.Put("out/takes/old.csv", "x");
+        var result = Tool.Run("run", config, "--out", folder["out"], "--only", "shed/*.bvh");
+        Assert.Equal(1, Count(result.Output, "(done earlier)"));
+        Assert.Contains("left over in the output folder: takes/old.csv", result.Output, StringComparison.Ordinal);
+        using var session = JsonDocument.Parse(File.ReadAllText(folder["out/session.json"]));
+        Assert.Equal(6, session.RootElement.GetProperty("takes").GetArrayLength());
+    }
+
+    [Fact]
+    public void A_changed_source_is_out_of_date_until_it_is_done_again()
+    {
+        var config = folder["demo/session.yaml"];
+        Tool.Run("run", config, "--out", folder["out"]);
+        File.AppendAllText(folder["demo/takes/yard/lantern-walk_01.csv"], "\n");
+        var result = Tool.Run("run", config, "--out", folder["out"], "--only", "shed/*.bvh");
+        Assert.Contains("out of date: yard/lantern-walk_01.csv", result.Output, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void A_dry_run_writes_nothing_and_says_the_same()
+    {
+        var result = Tool.Run("run", folder["demo/session.yaml"], "--out", folder["out"], "--dry-run");
+        Assert.Equal(0, result.Code);
+        Assert.False(Directory.Exists(folder["out"]));
+        var wet = Tool.Run("run", folder["demo/session.yaml"], "--out", folder["out"]);
+        Assert.Equal(wet.Output.Split('\n').Order().SkipLast(0).Where(l => l.StartsWith("samples", StringComparison.Ordinal)), result.Output.Split('\n').Where(l => l.StartsWith("samples", StringComparison.Ordinal)));
+    }
+
+    [Fact]
+    public void Strict_ends_with_three_when_a_reshoot_is_suggested()
+    {
+        Assert.Equal(3, Tool.Run("run", folder["demo/session.yaml"], "--out", folder["out"], "--strict").Code);
+        folder.Put("demo/takes/bad.csv", "");
+        Assert.Equal(1, Tool.Run("run", folder["demo/session.yaml"], "--out", folder["out"], "--strict").Code);
+    }
+
+    [Fact]
+    public void A_folder_without_a_config_is_cleaned_with_the_defaults()
+    {
+        var result = Tool.Run("run", folder["demo/takes"], "--out", folder["out"]);
+        Assert.True(result.Code == 0, result.Error);
+        Assert.True(File.Exists(folder["out/takes/shed/lid-swing_03.bvh"]));
+        Assert.DoesNotContain(":", File.ReadAllLines(folder["out/reshoot.csv"])[1].Split(',')[4], StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Quiet_prints_no_line_for_each_take()
+    {
+        var result = Tool.Run("run", folder["demo/session.yaml"], "--out", folder["out"], "--quiet");
+        Assert.DoesNotContain("accept with mends  ", result.Output, StringComparison.Ordinal);
+        Assert.Empty(result.Error);
+        Assert.Contains("verdicts:", result.Output, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void The_first_terminate_signal_lets_the_run_end_in_order()
+    {
+        using var process = Tool.Start([], "run", folder["demo/session.yaml"], "--out", folder["out"], "--follow");
+        var line = process.StandardError.ReadLine();
+        while (line is not null && !line.StartsWith("following", StringComparison.Ordinal))
+        {
+            line = process.StandardError.ReadLine();
+        }
+
+        System.Diagnostics.Process.Start("kill", ["-TERM", process.Id.ToString(System.Globalization.CultureInfo.InvariantCulture)]).WaitForExit();
+        Assert.True(process.WaitForExit(60_000));
+        Assert.Equal(143, process.ExitCode);
+        Assert.True(File.Exists(folder["out/session.json"]));
+    }
+
+    private static int Count(string text, string part) => text.Split(part).Length - 1;
+
+    private static void Same(SortedDictionary<string, byte[]> a, SortedDictionary<string, byte[]> b)
+    {
+        Assert.Equal(a.Keys, b.Keys);
+        Assert.All(a, file => Assert.True(file.Value.AsSpan().SequenceEqual(b[file.Key]), file.Key));
+    }
+}
