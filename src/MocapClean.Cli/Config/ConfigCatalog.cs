@@ -18,7 +18,7 @@ internal static class ConfigCatalog
     public const string Names = "names";
 
     private static readonly Setting<SessionConfig> Title = new(
-        "session", new Shape.Text(), "", "a title", (c, v) => c with { Session = v.Word }) { Unset = "name of the config", Example = "Duel, day 2" };
+        "session", new Shape.Text(), "", "a title", (c, v) => c with { Session = v.Word }) { Unset = "name of the config", Example = "\"Duel, day 2\"" };
 
     private static readonly Setting<SessionConfig> NamesOfJoints = new(
         Names, new Shape.TextList(), "", "names of joints, or globs (* and ?)", (c, _) => c)

@@ -119,5 +119,5 @@ public static class ConfigSchema
         return list;
     }
 
-    private static JsonArray Types(params string[] names) => [.. names.Select(n => (JsonNode)n)];
+    private static JsonNode Types(params string[] names) => names is [var only] ? only : new JsonArray([.. names.Select(n => (JsonNode)n)]);
 }

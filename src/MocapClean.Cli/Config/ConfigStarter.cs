@@ -1,4 +1,5 @@
 using System.Text;
+using MocapClean.Core.Stages.Settings;
 
 namespace MocapClean.Cli.Config;
 
@@ -8,7 +9,7 @@ public static class ConfigStarter
     private const string Head = """
         # yaml-language-server: $schema=mocapclean.schema.json
         # A session for MocapClean. Two lines are live: the takes to read and the folder to write. Every other key stands here with its
-        # default, or with an example where nothing is the default; take away the # in front of a key, and of its block, to change it.
+        # default, or with an example where nothing is the default; take away the "# " in front of a key, and of its block, to change it.
 
 
         """;
@@ -30,21 +31,39 @@ public static class ConfigStarter
     {
         if (key.Setting is { } setting)
         {
-            var value = setting.Default.Length > 0 ? setting.Default : setting.Example;
             var unset = setting.Default.Length > 0 || setting.IsRequired ? "" : $" (else: {setting.Unset})";
-            var only = setting.OnlyFor is [] || setting.OnlyFor.Length > 1 ? "" : $" ({setting.OnlyFor[0]})";
-            Line(text, $"{indent}{key.Name}: {value}", $"{key.Meaning}{unset}{only}", isLive);
+            var only = setting.OnlyFor is [var method] ? $" ({method})" : "";
+            Line(text, $"{indent}{key.Name}: {Value(setting)}", $"{key.Meaning}{unset}{only}", isLive);
             return;
         }
 
         Line(text, $"{indent}{key.Name}:", key.Meaning, isLive);
-        var first = key.IsList;
-        foreach (var child in key.Children.Where(c => !key.IsList || c.Setting is not null || c.Name == "smooth"))
+        if (key.IsList)
         {
-            Write(text, child, indent + (first ? "  - " : key.IsList ? "    " : "  "), isLive && child.Setting is { IsRequired: true });
-            first = false;
+            WriteEntry(text, key, indent);
+            return;
+        }
+
+        foreach (var child in key.Children)
+        {
+            Write(text, child, indent + "  ", isLive && child.Setting is { IsRequired: true });
         }
     }
+
+    // Of each block one key stands for all: they are those above.
+    private static void WriteEntry(StringBuilder text, KeyNode list, string indent)
+    {
+        var start = "- ";
+        foreach (var child in list.Children)
+        {
+            var first = child.Leaves().First();
+            var value = Value(first.Setting!);
+            Line(text, $"{indent}  {start}{child.Name}: {(child == first ? value : $"{{{first.Name}: {value}}}")}", child == first ? child.Meaning : "", isLive: false);
+            start = "  ";
+        }
+    }
+
+    private static string Value(Setting setting) => setting.Default.Length > 0 ? setting.Default : setting.Example;
 
     private static void Line(StringBuilder text, string yaml, string comment, bool isLive)
     {

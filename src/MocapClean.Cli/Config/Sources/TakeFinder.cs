@@ -6,6 +6,9 @@ namespace MocapClean.Cli.Config.Sources;
 /// <summary>Finds the takes that a config asks for.</summary>
 public sealed class TakeFinder
 {
+    // In the line that says that there is no take at all.
+    private const int MostNotes = 5;
+
     private readonly SessionConfig config;
     private readonly ImmutableArray<GlobSearch> searches;
     private readonly ImmutableArray<(PathGlob Whole, PathGlob Below)> except;
@@ -59,7 +62,8 @@ public sealed class TakeFinder
 
         if (takes.Count == 0)
         {
-            throw Problem("ingest.takes", string.Join("; ", [$"no take found for {string.Join(", ", config.Source.Takes)}", .. notes]));
+            var more = notes.Count > MostNotes ? $"; and {notes.Count - MostNotes} more" : "";
+            throw Problem("ingest.takes", string.Join("; ", [$"no take found for {string.Join(", ", config.Source.Takes)}", .. notes.Take(MostNotes)]) + more);
         }
 
         CheckOutputs(takes.Keys);
