@@ -36,6 +36,9 @@ public sealed record SmoothSettings
     /// <summary>Degree of the polynomial.</summary>
     public int Order { get; init; } = 3;
 
+    /// <summary>Largest angle in radians that any sample may be moved by; infinite where there is no bound.</summary>
+    public double LargestRadians { get; init; } = double.PositiveInfinity;
+
     /// <summary>The settings as the config knows them.</summary>
     public static SettingBlock<SmoothSettings> Table { get; } = new("smooth", "Smoothing in the quaternion domain, renormalised.",
     [
@@ -57,5 +60,7 @@ public sealed record SmoothSettings
         new("window", Shape.Of(Unit.FramesOrTime, 0.001, 100000), "100 ms",
             "length of the polynomial's window, made odd", (s, v) => s with { Window = v.Extent }) { OnlyFor = ["savitzky-golay"] },
         new("order", new Shape.Count(0, 7), "3", "degree of the polynomial", (s, v) => s with { Order = v.Whole }) { OnlyFor = ["savitzky-golay"] },
+        new("largest", Shape.Of(Unit.Degrees, 0.001, 180, "off"), "off", "largest turn by which any sample may be moved",
+            (s, v) => s with { LargestRadians = v.IsWord ? double.PositiveInfinity : v.Radians }),
     ]);
 }

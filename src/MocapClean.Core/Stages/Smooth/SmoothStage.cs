@@ -1,10 +1,133 @@
+using System.Collections.Immutable;
+using MocapClean.Core.Orientation;
 using MocapClean.Core.Takes;
 
 namespace MocapClean.Core.Stages.Smooth;
 
-/// <summary>The Smooth stage.</summary>
+/// <summary>
+/// Smooths every run of trusted samples by itself, joint by joint, in the domain of quaternions. Runs that are too short for the method pass
+/// as they are, and so do samples between which the joint turned too far for an average to mean anything; each with a row that says so.
+/// </summary>
 public sealed class SmoothStage : IStage
 {
+    /// <summary>
+    /// Smoothed components shorter than this before they are brought to length 1 averaged samples up to 50 degrees off: the motion is faster
+    /// than the filter.
+    /// </summary>
+    internal const double LeastLength = 0.9;
+
+    /// <summary>Angle in radians, far below what is promised of any output, under which a sample counts as unchanged.</summary>
+    private const double Unchanged = 1e-12;
+
     /// <inheritdoc/>
-    public Take Run(Take take, StageContext context) => take;
+    public Take Run(Take take, StageContext context) =>
+        PerJoint.Run(take, context, (joint, track, findings) => Smooth(take, joint, track, findings, context.PerJoint[joint].Smooth));
+
+    private static JointResult Smooth(Take take, int joint, JointTrack track, ImmutableArray<Finding> findings, SmoothSettings settings)
+    {
+        if (settings.Method == SmoothMethod.None)
+        {
+            return new JointResult(track, findings);
+        }
+
+        var rows = ImmutableArray.CreateBuilder<Finding>();
+        var smoother = Smoother(settings, take.Clock.Rate);
+        var stretches = new List<Segment>();
+        foreach (var segment in Segment.Trusted(track))
+        {
+            if (Refusal(segment, smoother, settings, take.Clock.Rate) is { } reason)
+            {
+                rows.Add(Row(joint, segment, FaultAction.Unsmoothed) with { Note = reason });
+            }
+            else
+            {
+                stretches.Add(segment);
+            }
+        }
+
+        if (stretches.Count > 0)
+        {
+            var curve = new JointCurve(track, take.Clock, stretches, take.TextRounding);
+            track = Replace(track, curve, smoother.Smooth(curve), settings.LargestRadians, joint, rows);
+        }
+
+        rows.Sort((a, b) => (a.First, -a.Last).CompareTo((b.First, -b.Last)));
+        return new JointResult(track, findings.AddRange(rows));
+    }
+
+    private static ISmoother Smoother(SmoothSettings settings, double rate) => settings.Method switch
+    {
+        SmoothMethod.Whittaker => new WhittakerSmoother(),
+        SmoothMethod.Butterworth => new ButterworthSmoother(settings.CutoffHertz),
+        SmoothMethod.SavitzkyGolay => new SavitzkyGolaySmoother(settings.Window.WholeFrames(rate) | 1, settings.Order),
+        _ => new AdaptiveSmoother(),
+    };
+
+    private static string? Refusal(Segment segment, ISmoother smoother, SmoothSettings settings, double rate)
+    {
+        if (settings.Method == SmoothMethod.Butterworth && !ButterworthSmoother.Exists(settings.CutoffHertz, rate))
+        {
+            return $"not smoothed: a cutoff of {settings.CutoffHertz} Hz is not below half of {Math.Round(rate, 3)} frames a second";
+        }
+
+        if (settings.Method == SmoothMethod.SavitzkyGolay && smoother.Shortest <= settings.Order)
+        {
+            return $"not smoothed: a window of {smoother.Shortest} samples leaves a polynomial of degree {settings.Order} nothing to average";
+        }
+
+        return segment.Count < smoother.Shortest
+            ? $"not smoothed: {segment.Count} samples are too few for the method, which needs {smoother.Shortest}"
+            : null;
+    }
+
+    private static JointTrack Replace(
+        JointTrack track, JointCurve curve, SmoothedCurve smoothed, double largest, int joint, ImmutableArray<Finding>.Builder rows)
+    {
+        var samples = track.Samples.ToArray();
+        var squared = new double[curve.Length];
+        for (var s = 0; s < curve.Stretches.Count; s++)
+        {
+            var (stretch, size, tooFast) = (curve.Stretches[s], 0.0, -1);
+            for (var i = curve.Starts[s]; i < curve.Starts[s + 1]; i++)
+            {
+                var frame = stretch.First + i - curve.Starts[s];
+                squared[i] = (smoothed.Samples[i] + (-curve.Samples[i])).NormSquared;
+                var follows = smoothed.Samples[i].Norm >= LeastLength;
+                tooFast = follows ? tooFast : tooFast < 0 ? frame : tooFast;
+                if (tooFast >= 0 && (follows || frame == stretch.Last))
+                {
+                    rows.Add(TooFast(joint, new Segment(tooFast, follows ? frame - 1 : frame)));
+                    tooFast = -1;
+                }
+
+                if (follows)
+                {
+                    var moved = Bounded(curve.Samples[i], smoothed.Samples[i].Normalised(), largest);
+                    var angle = Angle.Between(curve.Samples[i], moved);
+                    samples[frame] = angle > Unchanged ? curve.Signed(i, moved) : samples[frame];
+                    size = Math.Max(size, angle);
+                }
+            }
+
+            rows.Add(Row(joint, stretch, FaultAction.Smoothed) with { SizeRadians = size });
+        }
+
+        var noise = 2 * Math.Sqrt(Noise.Variance(squared, smoothed.Leverage, curve.Finest));
+        return track with { Samples = [.. samples], Smoothing = new SmoothingMeasure(noise, smoothed.EquivalentCutoff(curve.Rate)) };
+    }
+
+    private static Quat Bounded(Quat from, Quat to, double largest)
+    {
+        var turn = RotationVector.From(from, to);
+        var angle = turn.Norm;
+        return angle <= largest ? to : from * RotationVector.Exp(largest / angle * turn);
+    }
+
+    private static Finding TooFast(int joint, Segment run) => Row(joint, run, FaultAction.Unsmoothed) with
+    {
+        Note = "kept as it was: the joint turns faster here than the filter can follow",
+    };
+
+    private static Finding Row(int joint, Segment run, FaultAction action) =>
+        new() { Joint = joint, First = run.First, Last = run.Last, Kind = FaultKind.Smoothing, Action = action };
 }
