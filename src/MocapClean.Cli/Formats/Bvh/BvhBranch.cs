@@ -1,3 +1,4 @@
+using System.Globalization;
 using MocapClean.Core.Orientation;
 
 namespace MocapClean.Cli.Formats.Bvh;
@@ -46,8 +47,8 @@ internal readonly record struct BvhBranch(bool Mirrored, double First, double Se
     public string? Rewrite(ReadOnlySpan<byte> text, int angle)
     {
         var halfTurns = angle == 0 ? First : angle == 1 ? Second : Third;
-        return decimal.TryParse(text, System.Globalization.NumberStyles.Float, null, out var degrees)
-            ? ((Mirrored && angle == 1 ? -degrees : degrees) + (180 * (decimal)halfTurns)).ToString()
+        return decimal.TryParse(text, NumberStyles.Float, CultureInfo.InvariantCulture, out var degrees)
+            ? ((Mirrored && angle == 1 ? -degrees : degrees) + (180 * (decimal)halfTurns)).ToString(CultureInfo.InvariantCulture)
             : null;
     }
 

@@ -8,6 +8,10 @@ namespace MocapClean.Cli.Formats.Bvh;
 /// <param name="columns">Names of the channels in the order of a line.</param>
 internal sealed class BvhMotionReader(TakeSource source, ImmutableArray<string> columns)
 {
+    // What any recording stays within; far beyond it neither a rate nor the time of the last frame could be computed.
+    private const double ShortestFrame = 1e-6;
+    private const double LongestFrame = 1e6;
+
     /// <summary>Reads the section from behind the word MOTION.</summary>
     /// <param name="position">Offset in the file.</param>
     /// <param name="line">Number of the line that holds it.</param>
@@ -21,9 +25,9 @@ internal sealed class BvhMotionReader(TakeSource source, ImmutableArray<string> 
         }
 
         var text = ReadHeader(ref lines, "Frame Time");
-        if (!BvhText.TryNumber(text, out var frameTime) || !double.IsFinite(frameTime) || frameTime <= 0)
+        if (!BvhText.TryNumber(text, out var frameTime) || frameTime is not (>= ShortestFrame and <= LongestFrame))
         {
-            throw Fault($"line {lines.Number}, Frame Time", BvhText.Quote(text), "a number of seconds above 0");
+            throw Fault($"line {lines.Number}, Frame Time", BvhText.Quote(text), $"a number of seconds above 0 (from {ShortestFrame} to {LongestFrame})");
         }
 
         CheckCount(lines, frames);

@@ -75,13 +75,15 @@ internal sealed class BvhTrack
         Last = run.Last,
         Kind = FaultKind.SignFlip,
         Action = FaultAction.Flipped,
-        Note = run.Leap.Mirrored
-            ? "the angles leap to the other three that mean the same orientation"
-            : $"{string.Join(" and ", Turned(run.Leap).Select(k => names[Columns[k]][(Name.Length + 1)..]))} leaps by whole turns: the same orientation",
+        Note = run.Leap.Mirrored ? "the angles leap to the other three that mean the same orientation" : Turned(run.Leap, names),
     });
 
-    private static IEnumerable<int> Turned(BvhBranch leap) =>
-        new[] { leap.First, leap.Second, leap.Third }.Index().Where(t => t.Item != 0).Select(t => t.Index);
+    private string Turned(BvhBranch leap, ImmutableArray<string> names)
+    {
+        double[] turns = [leap.First, leap.Second, leap.Third];
+        string[] leaping = [.. Columns.Where((_, k) => turns[k] != 0).Select(c => names[c][(Name.Length + 1)..])];
+        return $"{string.Join(" and ", leaping)} {(leaping.Length > 1 ? "leap" : "leaps")} by whole turns: the same orientation";
+    }
 
     private void Convert(Span<EulerAngles> angles, Span<Quat> samples)
     {

@@ -46,10 +46,10 @@ public sealed class BvhFaultTests
     [InlineData("Frames: 2", "Frames: 1", "MOTION: found 2 lines of values, expected 1, as 'Frames:' says")]
     [InlineData("Frames: 2", "Frames: 99999999999", "MOTION: found 2 lines of values, expected 99999999999, as 'Frames:' says")]
     [InlineData("Frame Time: 0.01\n", "", "line 9: found '1 2 3', expected 'Frame Time:'")]
-    [InlineData("Frame Time: 0.01", "Frame Time: 0", "line 9, Frame Time: found '0', expected a number of seconds above 0")]
-    [InlineData("Frame Time: 0.01", "Frame Time: -0.01", "line 9, Frame Time: found '-0.01', expected a number of seconds above 0")]
-    [InlineData("Frame Time: 0.01", "Frame Time: inf", "line 9, Frame Time: found 'inf', expected a number of seconds above 0")]
-    [InlineData("Frame Time: 0.01", "Frame Time: 0,01", "line 9, Frame Time: found '0,01', expected a number of seconds above 0")]
+    [InlineData("Frame Time: 0.01", "Frame Time: 0", "line 9, Frame Time: found '0', expected a number of seconds above 0 (from 1E-06 to 1000000)")]
+    [InlineData("Frame Time: 0.01", "Frame Time: -0.01", "line 9, Frame Time: found '-0.01', expected a number of seconds above 0 (from 1E-06 to 1000000)")]
+    [InlineData("Frame Time: 0.01", "Frame Time: inf", "line 9, Frame Time: found 'inf', expected a number of seconds above 0 (from 1E-06 to 1000000)")]
+    [InlineData("Frame Time: 0.01", "Frame Time: 0,01", "line 9, Frame Time: found '0,01', expected a number of seconds above 0 (from 1E-06 to 1000000)")]
     [InlineData("4 5 6", "4 5", "row 2 (line 11): found 2 values, expected 3, one for each channel")]
     [InlineData("4 5 6", "4 5 6 7 8", "row 2 (line 11): found 5 values, expected 3, one for each channel")]
     [InlineData("4 5 6", "4 5,5 6", "row 2 (line 11), column 2 'Hips Yrotation': found '5,5', expected a number")]
@@ -112,6 +112,15 @@ public sealed class BvhFaultTests
         Assert.EndsWith("found 1 values, expected 60000, one for each channel", Message(Encoding.UTF8.GetBytes(text)), StringComparison.Ordinal);
         Assert.InRange(GC.GetAllocatedBytesForCurrentThread() - before, 0, 100_000_000);
     }
+
+    [Theory]
+    [InlineData("1e-320")]
+    [InlineData("1e-2147483648")]
+    [InlineData("1e308")]
+    [InlineData("nan")]
+    public void A_frame_time_beyond_any_sense_is_refused(string text) => Assert.Equal(
+        $"line 9, Frame Time: found '{text}', expected a number of seconds above 0 (from 1E-06 to 1000000)",
+        Message(Encoding.UTF8.GetBytes(Good.Replace("0.01", text))));
 
     [Fact]
     public void A_long_word_is_cut_short_in_the_message()

@@ -1,6 +1,8 @@
+using System.Text;
 using FsCheck;
 using FsCheck.Fluent;
 using FsCheck.Xunit;
+using MocapClean.Cli.Formats;
 using MocapClean.Core.Orientation;
 
 namespace MocapClean.Cli.Tests.Formats.Bvh;
@@ -56,5 +58,47 @@ public sealed class BvhPropertyTests
         var again = BvhTakes.Read(BvhTakes.Written(file, cleaned)).Take.Tracks[0].Samples;
         var worst = cleaned.Tracks[0].Samples.Zip(again, Angle.Between).Max();
         return (Angle.ToDegrees(worst) < 1e-9).Label($"{Angle.ToDegrees(worst)} degrees");
+    }
+
+    /// <summary>A small take with a few bytes changed for others, most of them such as stand in one.</summary>
+    public sealed record Damaged(byte[] Bytes);
+
+    public static class Damages
+    {
+        private const string Letters = "{}\n\r\t .:-+0123456789eEnaifROTJCHMX\0\u00ff";
+
+        private static readonly byte[] Good = Encoding.Latin1.GetBytes(
+            BvhTakes.OneJoint + "\n" + BvhTakes.Motion("0 0 0 170 5 -3", "0 0 0 179 5 -3", "0 0 0 -175 5 -3"));
+
+        public static Arbitrary<Damaged> Damaged() =>
+            (from count in Gen.Choose(1, 4)
+             from places in Gen.Choose(0, Good.Length - 1).ArrayOf(count)
+             from letters in Gen.Elements(Letters.ToCharArray()).ArrayOf(count)
+             select new Damaged(Damage(places, letters))).ToArbitrary();
+
+        private static byte[] Damage(int[] places, char[] letters)
+        {
+            byte[] bytes = [.. Good];
+            for (var k = 0; k < places.Length; k++)
+            {
+                bytes[places[k]] = (byte)letters[k];
+            }
+
+            return bytes;
+        }
+    }
+
+    [Property(MaxTest = 3000, Replay = "(123,457)", Arbitrary = [typeof(Damages)])]
+    public Property A_damaged_file_is_a_take_or_a_clear_line(Damaged damaged)
+    {
+        try
+        {
+            var file = BvhTakes.Read(damaged.Bytes);
+            return (BvhTakes.Read(BvhTakes.Written(file, file.Take)).Take.Length == file.Take.Length).Label("rows");
+        }
+        catch (InputFormatException e)
+        {
+            return (e.Message.Contains("found ") && !e.Message.Contains('\n')).Label(e.Message);
+        }
     }
 }

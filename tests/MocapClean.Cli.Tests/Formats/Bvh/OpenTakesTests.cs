@@ -93,17 +93,17 @@ public sealed class OpenTakesTests
         var leaping = file.Take.Findings.Select(f => file.Take.Tracks[f.Joint].Name).Distinct().Order(StringComparer.Ordinal);
         // By eye: angles of these joints pass 180 degrees and go on at -180, or back.
         Assert.Equal(["LeftArm", "RThumb", "RightArm", "RightFingerBase"], leaping);
+        // The first at frame 2183, where 151.2 -77.7 -176.4 is followed by 165.9 -77.1 167.0.
+        Assert.Equal(2183, file.Take.Findings.First(f => file.Take.Tracks[f.Joint].Name == "LeftArm").First);
         var again = BvhTakes.Read(BvhTakes.Written(file, file.Take)).Take;
         Assert.Empty(again.Findings);
         for (var j = 0; j < again.Tracks.Length; j++)
         {
             var (was, now) = (file.Take.Tracks[j].Samples, again.Tracks[j].Samples);
             var inside = file.Take.Findings.Where(f => f.Joint == j).ToList();
-            for (var n = 0; n < was.Length; n++)
-            {
-                Assert.InRange(Angle.ToDegrees(Angle.Between(was[n], now[n])), 0, 1e-9);
-                Assert.True(was[n].Equals(now[n]) || inside.Exists(f => f.First <= n && n <= f.Last));
-            }
+            Assert.InRange(Angle.ToDegrees(was.Zip(now, Angle.Between).Max()), 0, 1e-9);
+            var changed = Enumerable.Range(0, was.Length).Where(n => !was[n].Equals(now[n]));
+            Assert.DoesNotContain(changed, n => !inside.Exists(f => f.First <= n && n <= f.Last));
         }
     }
 
