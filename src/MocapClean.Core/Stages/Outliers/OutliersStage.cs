@@ -1,14 +1,26 @@
+using MocapClean.Core.Kernels;
 using MocapClean.Core.Takes;
 
 namespace MocapClean.Core.Stages.Outliers;
 
 /// <summary>
 /// Finds jumps in the increments of every joint and explains each by the cheapest story: spike, step, offset or freeze. Offsets are turned
-/// back, runs that must be replaced are rejected and wait for the fill stage, everything else stays as delivered and is said.
+/// back, runs that must be replaced are rejected and wait for the fill stage, everything else stays as delivered and is said. With the
+/// method <c>none</c> only missing samples are told.
 /// </summary>
 public sealed class OutliersStage : IStage
 {
     /// <inheritdoc/>
     public Take Run(Take take, StageContext context) => PerJoint.Run(take, context, (joint, track, findings) =>
-        JointOutliers.Search(take, joint, context.PerJoint[joint], findings));
+    {
+        if (context.PerJoint[joint].Outliers.Method != OutliersMethod.None)
+        {
+            return JointOutliers.Search(take, joint, context.PerJoint[joint], findings);
+        }
+
+        var marks = new TrackMarks(joint, track);
+        marks.TellGaps();
+        var (settled, all) = SignContinuity.Settle(marks.Track, [.. findings, .. marks.Findings], joint, flagGuesses: true);
+        return new JointResult(settled, all);
+    });
 }
