@@ -36,8 +36,7 @@ internal readonly struct ChordCurve : ICurve<ChordCurve>
     public static double CosHalfTurn(double dot) => dot;
 
     /// <inheritdoc/>
-    public static ChordCurve Through(Stretch stretch, int first, int last) =>
-        new(stretch[first], stretch[last], stretch.Time[first], stretch.Time[last] - stretch.Time[first]);
+    public static ChordCurve Through(Quat a, Quat b, double start, double end) => new(a, b, start, end - start);
 
     /// <inheritdoc/>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]

@@ -1,4 +1,5 @@
 using System.Runtime.Intrinsics;
+using MocapClean.Core.Orientation;
 
 namespace MocapClean.Core.Stages.Reduce;
 
@@ -17,11 +18,11 @@ internal interface ICurve<TSelf>
     /// </summary>
     static abstract double CosHalfTurn(double dot);
 
-    /// <summary>The playback between two frames of a stretch.</summary>
-    static abstract TSelf Through(Stretch stretch, int first, int last);
+    /// <summary>The playback between two keys at two times, in seconds.</summary>
+    static abstract TSelf Through(Quat a, Quat b, double start, double end);
 
     /// <summary>
-    /// Squared chords between what is played at four times (seconds since the stretch began) and four samples: 4 sin^2 of a quarter of the
+    /// Squared chords between what is played at four times and four samples: 4 sin^2 of a quarter of the
     /// angle between them. Signs of samples do not matter.
     /// </summary>
     Vector256<double> SquaredChords(Vector256<double> time, in FourQuats samples);

@@ -34,8 +34,16 @@ internal static class KeyChoice
 
     private static List<int> Search(Playback rule, Stretch stretch, SpanLimits limits) => rule switch
     {
-        Playback.Slerp => KeySearch<SlerpCurve>.Run(stretch, limits),
-        Playback.ComponentLinear => KeySearch<ChordCurve>.Run(stretch, limits),
+        Playback.Slerp => Search<SlerpCurve>(stretch, limits),
+        Playback.ComponentLinear => Search<ChordCurve>(stretch, limits),
         _ => throw new ArgumentOutOfRangeException(nameof(rule)),
     };
+
+    private static List<int> Search<TCurve>(Stretch stretch, SpanLimits limits)
+        where TCurve : struct, ICurve<TCurve>
+    {
+        var keys = KeySearch<TCurve>.Run(stretch, limits);
+        KeyBalance.Settle<TCurve>(stretch, keys, limits);
+        return keys;
+    }
 }

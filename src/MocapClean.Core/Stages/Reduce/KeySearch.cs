@@ -40,12 +40,10 @@ internal sealed class KeySearch<TCurve> : IDisposable
     {
         this.stretch = stretch;
         marks = new FrameMarks(stretch.Count);
-        // A hair less than asked for, so that the rounding of the written keys cannot pass it.
-        const double Hair = 1 - 1e-9;
-        tolerance = limits.Tolerance * Hair;
-        widest = limits.Widest * Hair;
+        tolerance = limits.Tolerance * SpanLimits.Hair;
+        widest = limits.Widest * SpanLimits.Hair;
         chord = SpanCheck.SquaredChord(tolerance);
-        cosWidest = Math.Cos(widest / 2);
+        cosWidest = limits.CosWidest;
         // A frame turned further than the widest key and the tolerance: playback that never turns back cannot pass it and return.
         cosHopeless = Math.Cos(Math.Min(Math.PI, limits.Widest + limits.Tolerance) / 2) - 1e-9;
         latest = ArrayPool<int>.Shared.Rent(stretch.Count);

@@ -29,15 +29,14 @@ internal readonly struct SlerpCurve : ICurve<SlerpCurve>
     public static double CosHalfTurn(double dot) => Math.Abs(dot);
 
     /// <inheritdoc/>
-    public static SlerpCurve Through(Stretch stretch, int first, int last)
+    public static SlerpCurve Through(Quat a, Quat b, double start, double end)
     {
-        var (a, b) = (stretch[first], stretch[last]);
         var dot = Quat.Dot(a, b);
         (b, dot) = dot < 0 ? (-b, -dot) : (b, dot);
         var rest = b + (-dot * a);
         var sine = rest.Norm;
         var e = sine > 0 ? (1 / sine) * rest : default;
-        return new(a, e, Math.Atan2(sine, dot), stretch.Time[first], stretch.Time[last] - stretch.Time[first]);
+        return new(a, e, Math.Atan2(sine, dot), start, end - start);
     }
 
     /// <inheritdoc/>

@@ -32,7 +32,7 @@ internal static class SpanCheck
             return -1;
         }
 
-        var curve = TCurve.Through(stretch, first, last);
+        var curve = Between<TCurve>(stretch, first, last);
         var most = Vector256.Create(limit);
         for (var k = 0; k < Suspects.Count; k += 4)
         {
@@ -56,6 +56,35 @@ internal static class SpanCheck
 
         return -1;
     }
+
+    /// <summary>The largest squared chord inside a span; infinite as soon as it is found to be above the ceiling.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
+    public static double Largest<TCurve>(Stretch stretch, int first, int last, double ceiling)
+        where TCurve : struct, ICurve<TCurve>
+    {
+        var curve = Between<TCurve>(stretch, first, last);
+        var (largest, most) = (Vector256<double>.Zero, Vector256.Create(ceiling));
+        for (var n = first + 1; n < last; n += 4)
+        {
+            var chords = curve.SquaredChords(stretch.Times(n), stretch.Four(n)) & Lanes(last - n);
+            largest = Vector256.MaxNative(largest, chords);
+            if (Vector256.GreaterThanAny(chords, most))
+            {
+                return double.PositiveInfinity;
+            }
+        }
+
+        return Math.Max(Math.Max(largest[0], largest[1]), Math.Max(largest[2], largest[3]));
+    }
+
+    /// <summary>All bits of the first lanes, as many as asked for, and none of the others.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    public static Vector256<double> Lanes(int count) =>
+        Vector256.LessThan(Vector256.Create(0.0, 1, 2, 3), Vector256.Create((double)count));
+
+    private static TCurve Between<TCurve>(Stretch stretch, int first, int last)
+        where TCurve : struct, ICurve<TCurve> =>
+        TCurve.Through(stretch[first], stretch[last], stretch.Time[first], stretch.Time[last]);
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     private static uint Beyond<TCurve>(in TCurve curve, Vector256<double> times, in FourQuats samples, Vector256<double> most)
