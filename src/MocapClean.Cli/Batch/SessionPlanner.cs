@@ -22,7 +22,7 @@ public static class SessionPlanner
         var addresses = new AddressOf(config, slates);
         var plan = new SessionPlan
         {
-            Title = config.Session,
+            Title = config.Title,
             Takes = [.. found.Takes.Select(t => new PlannedTake(t.Name, t.Path))],
             Read = config.Source.Read,
             SettingsFor = (_, joint) => config.SettingsFor(joint),

@@ -7,7 +7,8 @@ namespace MocapClean.Cli.Config;
 
 /// <summary>
 /// All keys of a config, laid out from the tables of settings. Reader, JSON schema, listing, starter and the README's table walk this.
-/// Settings of the session carry a <see cref="Setting{T}"/> of <see cref="SessionConfig"/>, those of a stage one of <see cref="StageSettings"/>.
+/// Settings of the session carry a <see cref="Setting{T}"/> of <see cref="SessionConfig"/>, those of a stage one of
+/// <see cref="StageSettings"/>.
 /// </summary>
 internal static class ConfigCatalog
 {
@@ -17,8 +18,13 @@ internal static class ConfigCatalog
     /// <summary>The key of such an entry that says which joints.</summary>
     public const string Names = "names";
 
+    private const string Ingest = "ingest";
+
     private static readonly Setting<SessionConfig> Title = new(
-        "session", new Shape.Text(), "", "a title", (c, v) => c with { Session = v.Word }) { Unset = "name of the config", Example = "\"Duel, day 2\"" };
+        "session", new Shape.Text(), "", "a title", (c, v) => c with { Title = v.Word })
+    {
+        Unset = "name of the config", Example = "\"Duel, day 2\"",
+    };
 
     private static readonly Setting<SessionConfig> NamesOfJoints = new(
         Names, new Shape.TextList(), "", "names of joints, or globs (* and ?)", (c, _) => c)
@@ -34,8 +40,11 @@ internal static class ConfigCatalog
         Name = "", Path = "", Meaning = "",
         Children =
         [
-            new KeyNode { Name = Title.Key, Path = Title.Key, Meaning = Title.Meaning, Setting = Title },
-            Block(SourceSettings.Table, Lift(SourceSettings.Table, c => c.Source, (c, s) => c with { Source = s }), StageSettingsOf("ingest")),
+            Leaf(Title),
+            Block(
+                SourceSettings.Table,
+                Lift(SourceSettings.Table, c => c.Source, (c, s) => c with { Source = s }),
+                Stages.Where(s => s.Name == Ingest).SelectMany(s => s.Settings.Settings)),
             Block(TimeCodeSettings.Table, Lift(TimeCodeSettings.Table, c => c.TimeCode, (c, s) => c with { TimeCode = s })),
             Block(OutputSettings.Table, Lift(OutputSettings.Table, c => c.Output, (c, s) => c with { Output = s })),
             .. StageBlocks(),
@@ -50,19 +59,21 @@ internal static class ConfigCatalog
         Name = Joints, Path = Joints, IsList = true, Meaning = "Other settings for some joints; later entries win.",
         Children =
         [
-            new KeyNode { Name = Names, Path = Names, Meaning = NamesOfJoints.Meaning, Setting = NamesOfJoints },
+            Leaf(NamesOfJoints),
             .. StageBlocks(),
         ],
     };
 
-    // Ingest is about files, not about joints, and stands with the keys that say which.
-    private static IEnumerable<KeyNode> StageBlocks() => Stages.Where(s => s.Name != "ingest").Select(s => Block(s.Settings, s.Settings.Settings));
+    private static KeyNode Leaf(Setting setting) => KeyNode.LeafOf(setting.Key, setting.Key, setting);
 
-    private static IEnumerable<Setting> StageSettingsOf(string name) => Stages.Where(s => s.Name == name).SelectMany(s => s.Settings.Settings);
+    // Ingest is about files, not about joints, and stands with the keys that say which.
+    private static IEnumerable<KeyNode> StageBlocks() =>
+        Stages.Where(s => s.Name != Ingest).Select(s => Block(s.Settings, s.Settings.Settings));
 
     private static KeyNode Block<T>(SettingBlock<T> block, params IEnumerable<Setting>[] settings) =>
         KeyNode.BlockOf(block.Name, block.Name, block.Meaning, settings.SelectMany(s => s).Select(s => (s.Key, s)));
 
     private static IEnumerable<Setting> Lift<T>(
-        SettingBlock<T> block, Func<SessionConfig, T> get, Func<SessionConfig, T, SessionConfig> set) => block.Settings.Select(s => s.Lift(get, set));
+        SettingBlock<T> block, Func<SessionConfig, T> get, Func<SessionConfig, T, SessionConfig> set) =>
+        block.Settings.Select(s => s.Lift(get, set));
 }

@@ -11,7 +11,7 @@ public sealed class ConfigException : Exception
 
     /// <summary>For one problem that lies in no file.</summary>
     public ConfigException(string message)
-        : this([new ConfigProblem("", Place.Whole, message)])
+        : this([new ConfigProblem("", TextPlace.Whole, message)])
     {
     }
 

@@ -51,7 +51,7 @@ public sealed class ConfigReader
         var full = Path.GetFullPath(path);
         var start = new SessionConfig
         {
-            Session = Path.GetFileNameWithoutExtension(full),
+            Title = Path.GetFileNameWithoutExtension(full),
             File = path,
             Folder = Path.GetDirectoryName(full) ?? full,
             Layers = layers,
@@ -68,11 +68,12 @@ public sealed class ConfigReader
         {
             if (item is not BlockNode block)
             {
-                problems.Add(item.At, $"an entry of {ConfigCatalog.Joints} is a block with {ConfigCatalog.Names} and settings, not {item.Kind}");
+                problems.Add(item.At, $"an entry of {ConfigCatalog.Joints} is a block with names and settings, not {item.Kind}");
                 continue;
             }
 
-            var content = walk.Read(block, ConfigCatalog.Root.Child(ConfigCatalog.Joints)! with { IsList = false, Path = "" }, block.At);
+            var keys = ConfigCatalog.Root.Child(ConfigCatalog.Joints)! with { IsList = false, Path = "" };
+            var content = walk.Read(block, keys, block.At);
             methods.Check(content, isEntry: true);
             var names = content.Given.FirstOrDefault(g => g.Key.Name == ConfigCatalog.Names)?.Value.List ?? [];
             layers.Add(new(layers.Count, names, StageSettingsIn(content)));

@@ -96,7 +96,7 @@ public static class ConfigSchema
     private static JsonObject Quantity(Shape.Quantity quantity)
     {
         var words = string.Concat(quantity.OrWords.Select(w => "|" + Regex.Escape(w)));
-        return new() { ["type"] = "string", ["pattern"] = $"^({UnitText.Of(quantity.Unit).Pattern()}{words})$" };
+        return new() { ["type"] = "string", ["pattern"] = $"^({UnitText.Of(quantity.Unit).Expression()}{words})$" };
     }
 
     // Nothing is typed in a config, so a text may look like a number or a truth.

@@ -58,7 +58,8 @@ public static class ConfigStarter
         {
             var first = child.Leaves().First();
             var value = Value(first.Setting!);
-            Line(text, $"{indent}  {start}{child.Name}: {(child == first ? value : $"{{{first.Name}: {value}}}")}", child == first ? child.Meaning : "", isLive: false);
+            var yaml = child == first ? value : $"{{{first.Name}: {value}}}";
+            Line(text, $"{indent}  {start}{child.Name}: {yaml}", child == first ? child.Meaning : "", isLive: false);
             start = "  ";
         }
     }

@@ -11,14 +11,15 @@ internal sealed class ConfigWalk(ProblemList problems)
     /// <param name="block">The YAML.</param>
     /// <param name="keys">The keys that may stand there.</param>
     /// <param name="at">Where a missing key is reported.</param>
-    public BlockContent Read(BlockNode block, KeyNode keys, Place at)
+    public BlockContent Read(BlockNode block, KeyNode keys, TextPlace at)
     {
         var content = new BlockContent();
         Enter(block, keys, content);
         foreach (var missing in keys.Leaves().Where(k => k.Setting!.IsRequired && !content.Asked.Contains(k.Path)))
         {
             var place = block.Entries.FirstOrDefault(e => e.Key == missing.Block)?.At ?? at;
-            problems.Add(place, $"{missing.Path} is missing; give {ShapeText.Wanted(missing.Setting!)}, such as {missing.Setting!.Example}");
+            var wanted = ShapeText.Wanted(missing.Setting!);
+            problems.Add(place, $"{missing.Path} is missing; give {wanted}, such as {missing.Setting!.Example}");
         }
 
         return content;
@@ -54,7 +55,8 @@ internal sealed class ConfigWalk(ProblemList problems)
             }
             else if (!entry.Value.IsNothing)
             {
-                problems.Add(entry.Value.At, $"{key.Path} takes a block of keys{(key.Child("method") is null ? "" : " or a method")}, not {entry.Value.Kind}");
+                var wanted = key.Child("method") is null ? "a block of keys" : "a block of keys or a method";
+                problems.Add(entry.Value.At, $"{key.Path} takes {wanted}, not {entry.Value.Kind}");
             }
         }
     }

@@ -7,4 +7,4 @@ namespace MocapClean.Cli.Config;
 /// <param name="Value">The value, within its shape.</param>
 /// <param name="Text">The value as written.</param>
 /// <param name="At">Where it stands.</param>
-internal sealed record Given(KeyNode Key, SettingValue Value, string Text, Place At);
+internal sealed record Given(KeyNode Key, SettingValue Value, string Text, TextPlace At);

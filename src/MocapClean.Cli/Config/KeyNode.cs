@@ -37,6 +37,10 @@ internal sealed record KeyNode
     public IEnumerable<KeyNode> Leaves() =>
         Setting is not null ? [this] : IsList ? [] : Children.SelectMany(c => c.Leaves());
 
+    /// <summary>A key that holds a setting.</summary>
+    public static KeyNode LeafOf(string name, string path, Setting setting) =>
+        new() { Name = name, Path = path, Meaning = setting.Meaning, Setting = setting };
+
     /// <summary>Lays settings out as a block; a dot in a key opens a block within it.</summary>
     public static KeyNode BlockOf(string name, string path, string meaning, IEnumerable<(string Key, Setting Setting)> settings) => new()
     {
@@ -47,7 +51,7 @@ internal sealed record KeyNode
         [
             .. settings.GroupBy(s => s.Key.Split('.')[0]).Select(group =>
                 group.First().Key == group.Key
-                    ? new KeyNode { Name = group.Key, Path = Below(path, group.Key), Meaning = group.First().Setting.Meaning, Setting = group.First().Setting }
+                    ? LeafOf(group.Key, Below(path, group.Key), group.First().Setting)
                     : BlockOf(group.Key, Below(path, group.Key), "", group.Select(s => (s.Key[(group.Key.Length + 1)..], s.Setting)))),
         ],
     };

@@ -10,7 +10,7 @@ internal sealed class ProblemList(string file)
     public string File => file;
 
     /// <summary>Adds one.</summary>
-    public void Add(Place at, string message) => problems.Add(new(file, at, message));
+    public void Add(TextPlace at, string message) => problems.Add(new(file, at, message));
 
     /// <summary>Ends here when anything was wrong.</summary>
     /// <exception cref="ConfigException">Something was.</exception>

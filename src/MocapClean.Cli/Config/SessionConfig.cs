@@ -8,7 +8,7 @@ namespace MocapClean.Cli.Config;
 public sealed record SessionConfig
 {
     /// <summary>A title.</summary>
-    public string Session { get; init; } = "";
+    public string Title { get; init; } = "";
 
     /// <summary>The config as the user named it; empty where there is none.</summary>
     public string File { get; init; } = "";
@@ -50,7 +50,8 @@ public sealed record SessionConfig
     public StageSettings SettingsFor(string joint) => StageLayers.Apply(HeldFor(joint));
 
     /// <summary>The values given for a joint, by path.</summary>
-    internal IReadOnlyDictionary<string, Holding> HeldFor(string joint) => StageLayers.Merge(Layers.Where(l => l.Covers(joint)));
+    internal IReadOnlyDictionary<string, HeldValue> HeldFor(string joint) =>
+        StageLayers.Merge(Layers.Where(l => l.Covers(joint)));
 
     /// <summary>Files and folders with the defaults of everything.</summary>
     /// <param name="paths">Relative to the current folder or absolute; every take of a folder counts.</param>
@@ -58,16 +59,17 @@ public sealed record SessionConfig
     /// <exception cref="ConfigException">A path leads nowhere.</exception>
     public static SessionConfig ForPaths(IReadOnlyCollection<string> paths, string output)
     {
-        var lost = paths.Where(p => !Path.Exists(p)).Select(p => new ConfigProblem(p, Place.Whole, "no such file or folder")).ToImmutableArray();
-        if (lost.Length > 0)
+        var lost = paths.Where(p => !Path.Exists(p));
+        if (lost.Any())
         {
-            throw new ConfigException(lost);
+            throw new ConfigException([.. lost.Select(p => new ConfigProblem(p, TextPlace.Whole, "no such file or folder"))]);
         }
 
-        var title = paths.Count == 1 ? Path.GetFileNameWithoutExtension(Path.TrimEndingDirectorySeparator(Path.GetFullPath(paths.First()))) : "session";
+        var only = paths.Count == 1 ? Path.TrimEndingDirectorySeparator(Path.GetFullPath(paths.First())) : "session";
+        var title = Path.GetFileNameWithoutExtension(only);
         return new SessionConfig
         {
-            Session = title.Length > 0 ? title : "session",
+            Title = title.Length > 0 ? title : "session",
             Folder = Path.GetFullPath("."),
             Source = new SourceSettings { Takes = [.. paths] },
             Output = new OutputSettings { Folder = Path.GetFullPath(output) },

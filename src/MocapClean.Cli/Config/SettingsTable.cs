@@ -19,7 +19,7 @@ public static class SettingsTable
 
         var joints = ConfigCatalog.Root.Child(ConfigCatalog.Joints)!;
         var blocks = ShapeText.All([.. joints.Children.Where(c => c.Setting is null).Select(c => $"`{c.Name}`")]);
-        return text.Append($"| `{joints.Path}` | none | list of `{ConfigCatalog.Names}` (globs) with {blocks} blocks: merged key by key, later entries win, ")
-            .Append("a changed `method` clears the other keys of its block |\n").ToString();
+        return text.Append($"| `{joints.Path}` | none | list of `{ConfigCatalog.Names}` (globs) with {blocks} blocks: ")
+            .Append("merged key by key, later entries win, a changed `method` clears the other keys of its block |\n").ToString();
     }
 }

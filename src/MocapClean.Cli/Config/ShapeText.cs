@@ -8,7 +8,7 @@ internal static class ShapeText
     /// <summary>What the key takes, and what stands there instead.</summary>
     public static string Mismatch(KeyNode key, string found) => $"{key.Path} takes {Wanted(key.Setting!)}, not {found}";
 
-    /// <summary>Both bounds, in the spelling that the value was written in, or in a smaller one where that would be a tiny number.</summary>
+    /// <summary>Both bounds, spelt as the value was, or in a smaller unit where that would be a tiny number.</summary>
     public static string Bounds(Shape.Quantity quantity, UnitText unit, UnitSpelling spelling) =>
         $"from {Amount(quantity.Low, unit, spelling)} to {Amount(quantity.High, unit, spelling)}";
 
@@ -44,7 +44,8 @@ internal static class ShapeText
     private static string Quantity(Setting setting, Shape.Quantity quantity)
     {
         var unit = UnitText.Of(quantity.Unit);
-        var example = char.IsAsciiDigit(setting.Default.FirstOrDefault()) ? setting.Default : setting.Example.Length > 0 ? setting.Example : unit.Example;
+        string[] examples = [setting.Default, setting.Example, unit.Example];
+        var example = examples.First(e => char.IsAsciiDigit(e.FirstOrDefault()));
         return $"{unit.Noun} such as '{example}'" + (quantity.OrWords is [] ? "" : $" or the word {Either(quantity.OrWords)}");
     }
 }

@@ -23,7 +23,8 @@ public sealed record SourceSettings
     /// <summary>The settings as the config knows them.</summary>
     public static SettingBlock<SourceSettings> Table { get; } = new("ingest", "What is read and how.",
     [
-        new("takes", new Shape.TextList(), "", "files, folders or globs (* within a name, ** across folders)", (s, v) => s with { Takes = v.List })
+        new("takes", new Shape.TextList(), "", "files, folders or globs (* within a name, ** across folders)",
+            (s, v) => s with { Takes = v.List })
         {
             IsRequired = true, Unset = "required", Example = "takes/**/*.csv",
         },
@@ -47,8 +48,8 @@ public sealed record SourceSettings
         },
         new("csv.layout", Shape.OneOf("auto", "wide", "long"), "auto", "wide: one row a frame; long: one row a joint and frame",
             (s, v) => s with { Read = s.Read with { CsvLayout = v.Word } }),
-        new("csv.joint-columns", new Shape.Text("{joint}", "{component}"), "\"{joint}.{component}\"", "how a wide file names its orientation columns",
-            (s, v) => s with { Read = s.Read with { CsvJointColumns = v.Word } }),
+        new("csv.joint-columns", new Shape.Text("{joint}", "{component}"), "\"{joint}.{component}\"",
+            "how a wide file names its orientation columns", (s, v) => s with { Read = s.Read with { CsvJointColumns = v.Word } }),
         new("csv.components", new Shape.TextList(Length: 4), "[qw, qx, qy, qz]", "names of the components in the order w, x, y, z",
             (s, v) => s with { Read = s.Read with { CsvComponents = v.List } }),
         new("csv.time", new Shape.Text(), "time", "name of the time column, in seconds",

@@ -19,7 +19,7 @@ internal sealed record StageLayer(int Number, ImmutableArray<string> Names, Immu
 /// <summary>A value that holds, and the layer that gave it.</summary>
 /// <param name="Given">The value.</param>
 /// <param name="Layer">The layer.</param>
-internal sealed record Holding(Given Given, StageLayer Layer);
+internal sealed record HeldValue(Given Given, StageLayer Layer);
 
 /// <summary>Lays layers over one another.</summary>
 internal static class StageLayers
@@ -28,14 +28,14 @@ internal static class StageLayers
     /// The values that hold where these layers meet, by path: key by key, later layers win, a changed method clears the other keys of its
     /// block, and keys of another method than the one that holds fall away.
     /// </summary>
-    public static IReadOnlyDictionary<string, Holding> Merge(IEnumerable<StageLayer> layers)
+    public static IReadOnlyDictionary<string, HeldValue> Merge(IEnumerable<StageLayer> layers)
     {
-        var held = new Dictionary<string, Holding>();
+        var held = new Dictionary<string, HeldValue>();
         foreach (var layer in layers)
         {
             foreach (var method in layer.Given.Where(g => g.Key.Path == g.Key.MethodPath && g.Value.Word != MethodOf(g.Key, held)))
             {
-                foreach (var path in held.Values.Select(h => h.Given.Key).Where(k => k.Block == method.Key.Block).Select(k => k.Path).ToList())
+                foreach (var path in held.Keys.Where(p => held[p].Given.Key.Block == method.Key.Block).ToList())
                 {
                     held.Remove(path);
                 }
@@ -51,14 +51,14 @@ internal static class StageLayers
     }
 
     /// <summary>The settings with these values set.</summary>
-    public static StageSettings Apply(IReadOnlyDictionary<string, Holding> held) =>
+    public static StageSettings Apply(IReadOnlyDictionary<string, HeldValue> held) =>
         held.Values.Aggregate(new StageSettings(), (s, h) => ((Setting<StageSettings>)h.Given.Key.Setting!).With(s, h.Given.Value));
 
     /// <summary>Whether the method that holds in the key's block knows the key.</summary>
-    public static bool Suits(KeyNode key, IReadOnlyDictionary<string, Holding> held) =>
+    public static bool Suits(KeyNode key, IReadOnlyDictionary<string, HeldValue> held) =>
         key.Setting!.OnlyFor is [] || key.Setting.OnlyFor.Contains(MethodOf(key, held));
 
-    private static string MethodOf(KeyNode key, IReadOnlyDictionary<string, Holding> held) =>
+    private static string MethodOf(KeyNode key, IReadOnlyDictionary<string, HeldValue> held) =>
         held.TryGetValue(key.MethodPath, out var holding) ? holding.Given.Value.Word : DefaultMethod(key.Block);
 
     /// <summary>The method of a block where nothing is given; empty for a block without one.</summary>

@@ -50,7 +50,7 @@ internal sealed partial record UnitText(string Noun, string Example, params Immu
     public UnitSpelling? Spelling(string text) => Spellings.Where(s => s.Text == text).Select(s => (UnitSpelling?)s).FirstOrDefault();
 
     /// <summary>A pattern that every value with this unit meets.</summary>
-    public string Pattern() => NumberPattern + " *(" + string.Join('|', Spellings.Select(s => Regex.Escape(s.Text))) + ")";
+    public string Expression() => NumberPattern + " *(" + string.Join('|', Spellings.Select(s => Regex.Escape(s.Text))) + ")";
 
     [GeneratedRegex("^(?<number>" + NumberPattern + ") *(?<unit>.*)$", RegexOptions.ExplicitCapture | RegexOptions.CultureInvariant, 1000)]
     private static partial Regex NumberAndRest();

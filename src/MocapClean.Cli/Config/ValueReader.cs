@@ -47,9 +47,10 @@ internal sealed class ValueReader(ProblemList problems)
         }
 
         var unit = UnitText.Of(quantity.Unit);
-        if (!UnitText.TrySplit(text, out var number, out var written) || unit.Spelling(written) is not { } spelling)
+        var isNumber = UnitText.TrySplit(text, out var number, out var written);
+        if (!isNumber || unit.Spelling(written) is not { } spelling)
         {
-            return (null, ShapeText.Mismatch(key, $"'{text}'") + (written.Length == 0 && UnitText.TrySplit(text, out _, out _) ? ": its unit is missing" : ""));
+            return (null, ShapeText.Mismatch(key, $"'{text}'") + (isNumber && written.Length == 0 ? ": its unit is missing" : ""));
         }
 
         var amount = number * spelling.Times / spelling.Per;

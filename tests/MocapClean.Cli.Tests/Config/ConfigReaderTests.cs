@@ -15,7 +15,7 @@ public sealed class ConfigReaderTests
     public void Two_lines_are_enough()
     {
         var config = Reading.Config();
-        Assert.Equal("day", config.Session);
+        Assert.Equal("day", config.Title);
         Assert.Equal(["takes"], config.Source.Takes);
         Assert.Equal(Path.GetFullPath("out"), config.OutputFolder);
         Assert.Equal(new(), config.SettingsFor("hips"));
@@ -46,7 +46,7 @@ public sealed class ConfigReaderTests
             limits: {take-size: 300 MB}
             """,
             "day.yaml");
-        Assert.Equal("Duel", config.Session);
+        Assert.Equal("Duel", config.Title);
         Assert.Equal(["a/*.csv", "b/*.bvh"], config.Source.Takes);
         Assert.Equal(["*x*"], config.Source.Except);
         Assert.Equal("a", config.Source.Root);

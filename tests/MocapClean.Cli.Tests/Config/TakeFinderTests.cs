@@ -125,7 +125,7 @@ public sealed class TakeFinderTests : IDisposable
     {
         Write("s/a.csv", "s/b/c.bvh", "s/odd[1]*.csv");
         var config = SessionConfig.ForPaths([Path.Combine(folder.Path, "s")], Path.Combine(folder.Path, "out"));
-        Assert.Equal("s", config.Session);
+        Assert.Equal("s", config.Title);
         Assert.Equal(["a.csv", "b/c.bvh", "odd[1]*.csv"], TakeFinder.Find(config).Takes.Select(t => t.Name));
         var one = SessionConfig.ForPaths([Path.Combine(folder.Path, "s/odd[1]*.csv")], "out");
         Assert.Equal(["odd[1]*.csv"], TakeFinder.Find(one).Takes.Select(t => t.Name));

@@ -3,15 +3,15 @@ using System.IO.Enumeration;
 namespace MocapClean.Cli.Config.Sources;
 
 /// <summary>A glob of the config with its fixed part: the folder that all it can match lies in.</summary>
-internal sealed record GlobSearch
+internal sealed class GlobSearch
 {
-    private GlobSearch(string text, string folder, string pattern, bool isAsked)
+    private GlobSearch(string text, string folder, string rest, bool isAsked)
     {
         Text = text;
         Folder = folder;
-        Pattern = pattern;
+        Rest = rest;
         IsAsked = isAsked;
-        glob = new PathGlob(pattern);
+        glob = new PathGlob(rest);
     }
 
     private readonly PathGlob glob;
@@ -23,7 +23,7 @@ internal sealed record GlobSearch
     public string Folder { get; }
 
     /// <summary>What follows, relative to it.</summary>
-    public string Pattern { get; }
+    public string Rest { get; }
 
     /// <summary>It asks for these very files, so that one of another format is worth a word; a folder only asks for its takes.</summary>
     public bool IsAsked { get; }
@@ -57,7 +57,7 @@ internal sealed record GlobSearch
             return [];
         }
 
-        var exact = Path.Combine(Folder, Pattern);
+        var exact = Path.Combine(Folder, Rest);
         if (File.Exists(exact))
         {
             return [exact];
@@ -68,7 +68,7 @@ internal sealed record GlobSearch
             (ref FileSystemEntry entry) => entry.ToFullPath(),
             new EnumerationOptions
             {
-                RecurseSubdirectories = Pattern.Contains('/') || Pattern.Contains("**"),
+                RecurseSubdirectories = Rest.Contains('/') || Rest.Contains("**"),
                 AttributesToSkip = FileAttributes.None,
                 IgnoreInaccessible = false,
             })

@@ -16,7 +16,8 @@ internal sealed class OutputPlace(string folder)
     /// <summary>Whether a file in the folder was written by an earlier run, and not delivered there.</summary>
     /// <param name="path">The file, absolute.</param>
     /// <param name="realPath">The file with links followed.</param>
-    public bool IsOwn(string path, string realPath) => Directory.Exists(Path.Combine(folder, "log")) && (IsWritten(path) || IsWritten(realPath));
+    public bool IsOwn(string path, string realPath) =>
+        Directory.Exists(Path.Combine(folder, "log")) && (IsWritten(path) || IsWritten(realPath));
 
     private bool IsWritten(string path)
     {

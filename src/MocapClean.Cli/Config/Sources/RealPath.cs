@@ -24,6 +24,9 @@ internal static class RealPath
     }
 
     /// <summary>Whether a path is a folder or lies in it; both real and absolute.</summary>
-    public static bool IsWithin(string path, string folder) =>
-        path == folder || path.StartsWith(Path.EndsInDirectorySeparator(folder) ? folder : folder + Path.DirectorySeparatorChar, StringComparison.Ordinal);
+    public static bool IsWithin(string path, string folder)
+    {
+        var start = Path.EndsInDirectorySeparator(folder) ? folder : folder + Path.DirectorySeparatorChar;
+        return path == folder || path.StartsWith(start, StringComparison.Ordinal);
+    }
 }

@@ -32,7 +32,9 @@ public sealed class SlateReader
 
     /// <summary>Reads the slates that a config names; a config may do without.</summary>
     /// <param name="config">The config.</param>
-    /// <param name="takes">Names of the session's takes; a slate names one by its whole name, its file name, or either without the ending.</param>
+    /// <param name="takes">
+    /// Names of the session's takes; a slate names one by its whole name, its file name, or either without the ending.
+    /// </param>
     /// <exception cref="ConfigException">The file cannot be read, or lines of it make no sense: all of them are told.</exception>
     public static SlateTable Read(SessionConfig config, IReadOnlyCollection<string> takes)
     {
@@ -99,7 +101,7 @@ public sealed class SlateReader
 
     private void Take(CsvReader csv)
     {
-        var at = new Place((int)csv.LineNumber, 1);
+        var at = new TextPlace((int)csv.LineNumber, 1);
         var name = csv.GetString("take");
         var found = takes[name].ToList();
         if (name.Length == 0)
@@ -133,7 +135,7 @@ public sealed class SlateReader
         }
     }
 
-    private int? Frame(CsvReader csv, string column, Place at, bool isNeeded = false)
+    private int? Frame(CsvReader csv, string column, TextPlace at, bool isNeeded = false)
     {
         var text = csv.TryGetFieldIndex(column, out var index) ? csv.GetString(index) : "";
         if (text.Length == 0 && !isNeeded)
@@ -150,7 +152,7 @@ public sealed class SlateReader
         return null;
     }
 
-    private TimeCode? Address(string text, Place at)
+    private TimeCode? Address(string text, TextPlace at)
     {
         var address = TimeCode.TryParse(text, rate, out var problem);
         if (address is null)

@@ -9,7 +9,7 @@ namespace MocapClean.Cli.Config.Sources;
 /// <param name="ActionFirst">The first frame that counts in verdicts, or null for the take's first.</param>
 /// <param name="ActionLast">The last one, or null for the take's last.</param>
 /// <param name="At">Where it stands in its file.</param>
-public sealed record TakeSlate(string Take, Slate Slate, int? ActionFirst, int? ActionLast, Place At);
+public sealed record TakeSlate(string Take, Slate Slate, int? ActionFirst, int? ActionLast, TextPlace At);
 
 /// <summary>The slates of a session.</summary>
 /// <param name="ByTake">Slates by take.</param>

@@ -22,7 +22,9 @@ public sealed class TakeFinder
         this.config = config;
         searches = [.. config.Source.Takes.Select(t => GlobSearch.From(t, config.Folder))];
         except = [.. config.Source.Except.Select(e => (new PathGlob(config.Absolute(e)), new PathGlob(e)))];
-        root = config.Source.Root.Length > 0 ? Path.TrimEndingDirectorySeparator(config.Absolute(config.Source.Root)) : Common(searches.Select(s => s.Folder));
+        root = config.Source.Root.Length > 0
+            ? Path.TrimEndingDirectorySeparator(config.Absolute(config.Source.Root))
+            : Common(searches.Select(s => s.Folder));
         realRoot = RealPath.Of(root);
         output = new OutputPlace(config.OutputFolder);
     }
@@ -62,12 +64,18 @@ public sealed class TakeFinder
 
         if (takes.Count == 0)
         {
-            var more = notes.Count > MostNotes ? $"; and {notes.Count - MostNotes} more" : "";
-            throw Problem("ingest.takes", string.Join("; ", [$"no take found for {string.Join(", ", config.Source.Takes)}", .. notes.Take(MostNotes)]) + more);
+            throw NoTake();
         }
 
         CheckOutputs(takes.Keys);
         return new(root, [.. takes.Values], [.. notes]);
+    }
+
+    private ConfigException NoTake()
+    {
+        var asked = string.Join(", ", config.Source.Takes);
+        var more = notes.Count > MostNotes ? $"; and {notes.Count - MostNotes} more" : "";
+        return Problem("ingest.takes", string.Join("; ", [$"no take found for {asked}", .. notes.Take(MostNotes)]) + more);
     }
 
     private List<(GlobSearch Search, string Path)> Matches(GlobSearch search)
@@ -96,8 +104,8 @@ public sealed class TakeFinder
 
         if (output.Holds(path) || output.Holds(real))
         {
-            return output.IsOwn(path, real) ? false : throw Problem(
-                "output.folder", $"output folder '{config.Output.Folder}' already holds takes ({Relative(path)}); give it a folder of its own");
+            var holds = $"output folder '{config.Output.Folder}' already holds takes ({Relative(path)})";
+            return output.IsOwn(path, real) ? false : throw Problem("output.folder", $"{holds}; give it a folder of its own");
         }
 
         if (FormatCatalog.For(path) is null)
@@ -131,17 +139,18 @@ public sealed class TakeFinder
 
     private void CheckOutputs(IEnumerable<string> names)
     {
-        var clashes = names.GroupBy(n => n, StringComparer.OrdinalIgnoreCase).Where(g => g.Count() > 1).Select(g => string.Join(" and ", g)).ToList();
-        if (clashes.Count > 0)
+        var clashes = names.GroupBy(n => n, StringComparer.OrdinalIgnoreCase).Where(g => g.Count() > 1);
+        var list = string.Join("; ", clashes.Select(g => string.Join(" and ", g)));
+        if (list.Length > 0)
         {
-            throw Problem("ingest.takes", $"takes that would write one file where upper and lower case are the same: {string.Join("; ", clashes)}");
+            throw Problem("ingest.takes", $"takes that would write one file where upper and lower case are the same: {list}");
         }
     }
 
     private string Relative(string path) => Path.GetRelativePath(root, path).Replace(Path.DirectorySeparatorChar, '/');
 
     private ConfigException Problem(string key, string message) =>
-        new([new(config.File, config.Given.TryGetValue(key, out var given) ? given.At : Place.Whole, message)]);
+        new([new(config.File, config.Given.TryGetValue(key, out var given) ? given.At : TextPlace.Whole, message)]);
 
     private static string Common(IEnumerable<string> folders) => folders.Aggregate((a, b) =>
     {

@@ -4,7 +4,7 @@ namespace MocapClean.Cli.Config.Yaml;
 
 /// <summary>A piece of YAML with its place. Nothing is typed: what a word means is for the setting to say.</summary>
 /// <param name="At">Where it starts.</param>
-internal abstract record ConfigNode(Place At)
+internal abstract record ConfigNode(TextPlace At)
 {
     /// <summary>What it is, as a message says it.</summary>
     public abstract string Kind { get; }
@@ -17,7 +17,7 @@ internal abstract record ConfigNode(Place At)
 /// <param name="Text">The text, without quotes.</param>
 /// <param name="IsPlain">Written without quotes.</param>
 /// <param name="At">Where it starts.</param>
-internal sealed record WordNode(string Text, bool IsPlain, Place At) : ConfigNode(At)
+internal sealed record WordNode(string Text, bool IsPlain, TextPlace At) : ConfigNode(At)
 {
     /// <inheritdoc/>
     public override string Kind => IsNothing ? "nothing" : $"'{Text}'";
@@ -26,7 +26,7 @@ internal sealed record WordNode(string Text, bool IsPlain, Place At) : ConfigNod
 /// <summary>A list.</summary>
 /// <param name="Items">In order.</param>
 /// <param name="At">Where it starts.</param>
-internal sealed record ListNode(ImmutableArray<ConfigNode> Items, Place At) : ConfigNode(At)
+internal sealed record ListNode(ImmutableArray<ConfigNode> Items, TextPlace At) : ConfigNode(At)
 {
     /// <inheritdoc/>
     public override string Kind => "a list";
@@ -35,7 +35,7 @@ internal sealed record ListNode(ImmutableArray<ConfigNode> Items, Place At) : Co
 /// <summary>Keys with values.</summary>
 /// <param name="Entries">In order, no key twice.</param>
 /// <param name="At">Where it starts.</param>
-internal sealed record BlockNode(ImmutableArray<KeyedNode> Entries, Place At) : ConfigNode(At)
+internal sealed record BlockNode(ImmutableArray<KeyedNode> Entries, TextPlace At) : ConfigNode(At)
 {
     /// <inheritdoc/>
     public override string Kind => "a block of keys";
@@ -45,4 +45,4 @@ internal sealed record BlockNode(ImmutableArray<KeyedNode> Entries, Place At) : 
 /// <param name="Key">The key.</param>
 /// <param name="At">Where the key starts.</param>
 /// <param name="Value">The value.</param>
-internal sealed record KeyedNode(string Key, Place At, ConfigNode Value);
+internal sealed record KeyedNode(string Key, TextPlace At, ConfigNode Value);

@@ -15,7 +15,7 @@ internal static class ConfigText
         var (text, wrong) = Try(path);
         if (wrong.Length > 0)
         {
-            problems.Add(Place.Whole, wrong);
+            problems.Add(TextPlace.Whole, wrong);
         }
 
         return text;
@@ -59,8 +59,8 @@ internal static class ConfigText
 
     private static string Decode(byte[] bytes)
     {
-        using var reader = new StreamReader(
-            new MemoryStream(bytes), new UTF8Encoding(encoderShouldEmitUTF8Identifier: false, throwOnInvalidBytes: true), detectEncodingFromByteOrderMarks: true);
+        var strict = new UTF8Encoding(encoderShouldEmitUTF8Identifier: false, throwOnInvalidBytes: true);
+        using var reader = new StreamReader(new MemoryStream(bytes), strict, detectEncodingFromByteOrderMarks: true);
         return reader.ReadToEnd();
     }
 }

@@ -37,7 +37,8 @@ internal sealed class YamlTree
         catch (InvalidOperationException)
         {
             // What the parser throws, without a place, when a bracket is still open where the next key starts.
-            problems.Add(tree.parser.Current is { } last ? At(last.End) : new Place(1, 1), "this is not YAML: a bracket or brace is not closed");
+            var last = tree.parser.Current is { } read ? At(read.End) : new TextPlace(1, 1);
+            problems.Add(last, "this is not YAML: a bracket or brace is not closed");
         }
 
         return null;
@@ -48,7 +49,7 @@ internal sealed class YamlTree
         _ = Next<StreamStart>();
         if (!parser.MoveNext() || parser.Current is not DocumentStart)
         {
-            problems.Add(new Place(1, 1), "the file is empty; two keys are needed: ingest.takes and output.folder");
+            problems.Add(new TextPlace(1, 1), "the file is empty; two keys are needed: ingest.takes and output.folder");
             return null;
         }
 
@@ -136,7 +137,7 @@ internal sealed class YamlTree
         return refused is null ? next : throw new YamlException(next.Start, next.End, refused);
     }
 
-    private static Place At(Mark mark) => new((int)mark.Line, (int)mark.Column);
+    private static TextPlace At(Mark mark) => new((int)mark.Line, (int)mark.Column);
 
     private static string FirstLower(string text) => text.Length == 0 ? text : char.ToLowerInvariant(text[0]) + text[1..];
 }
