@@ -25,7 +25,7 @@ internal static class Tool
     }
 
     /// <summary>Starts and returns the process.</summary>
-    public static Process Start(Dictionary<string, string> environment, params string[] args)
+    public static System.Diagnostics.Process Start(Dictionary<string, string> environment, params string[] args)
     {
         var start = new ProcessStartInfo("dotnet", [Path.Combine(AppContext.BaseDirectory, "mocapclean.dll"), .. args])
         {
@@ -38,7 +38,7 @@ internal static class Tool
             start.Environment[key] = value;
         }
 
-        return Process.Start(start)!;
+        return System.Diagnostics.Process.Start(start)!;
     }
 }
 
