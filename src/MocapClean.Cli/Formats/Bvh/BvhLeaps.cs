@@ -28,6 +28,19 @@ internal static class BvhLeaps
 
     private static readonly double SmallTurn = Angle.FromDegrees(5);
 
+    /// <summary>What brings a triple to the branch of the one before it where it leaps from it; null where it does not.</summary>
+    public static BvhBranch? Between(EulerAngles before, EulerAngles angles)
+    {
+        var jump = BvhBranch.Leap(angles, before);
+        if (jump is not (> Narrowest and < Widest))
+        {
+            return null;
+        }
+
+        var nearest = BvhBranch.Nearest(angles, before);
+        return Clearly * BvhBranch.Leap(nearest.Of(angles), before) <= jump ? nearest : null;
+    }
+
     /// <summary>The runs of a track, in order.</summary>
     /// <param name="angles">The angles of each frame, radians.</param>
     /// <param name="samples">The orientations; NaN where missing.</param>
@@ -42,8 +55,7 @@ internal static class BvhLeaps
                 continue;
             }
 
-            if (before >= 0 && BvhBranch.Leap(angles[n], angles[before]) is > Narrowest and < Widest
-                && LeapAt(angles, samples, before, n) is { } found)
+            if (before >= 0 && Between(angles[before], angles[n]) is { } found && GoesOn(samples, before, n))
             {
                 Close(n - 1);
                 (start, branch, leap) = (n, branch.After(found), found);
@@ -62,13 +74,6 @@ internal static class BvhLeaps
                 runs.Add(new BvhRun(start, last, branch, leap));
             }
         }
-    }
-
-    private static BvhBranch? LeapAt(ReadOnlySpan<EulerAngles> angles, ImmutableArray<Quat> samples, int before, int n)
-    {
-        var nearest = BvhBranch.Nearest(angles[n], angles[before]);
-        var jump = BvhBranch.Leap(angles[n], angles[before]);
-        return Clearly * BvhBranch.Leap(nearest.Of(angles[n]), angles[before]) <= jump && GoesOn(samples, before, n) ? nearest : null;
     }
 
     private static bool GoesOn(ImmutableArray<Quat> samples, int before, int n)

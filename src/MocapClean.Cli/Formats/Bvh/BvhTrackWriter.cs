@@ -7,7 +7,7 @@ namespace MocapClean.Cli.Formats.Bvh;
 /// <summary>
 /// Turns the changed samples of one track back to angles, frame after frame. Frames behind a leap come to the branch before it with the
 /// decimals they have; changed samples are written with ten decimals on the branch of the delivered angles where they moved little, else of
-/// the angles written before them.
+/// the angles written before them. Where a smoothed joint passes the lock on its other side, the changed samples behind it follow.
 /// </summary>
 internal sealed class BvhTrackWriter
 {
@@ -25,6 +25,11 @@ internal sealed class BvhTrackWriter
     private readonly BvhTrack track;
     private readonly JointTrack cleaned;
     private EulerAngles? before;
+
+    /// <summary>The changed sample before, -1 behind a delivered one; and the branch that its run has come to.</summary>
+    private int changed = -1;
+    private BvhBranch passed;
+
     private int run;
 
     /// <summary>For one track.</summary>
@@ -44,13 +49,15 @@ internal sealed class BvhTrackWriter
         EulerAngles? delivered = track.Delivered[frame].IsOrientation ? branch.Of(track.Angles(frame)) : null;
         if (Changed(frame))
         {
-            var angles = Convert(frame, delivered);
-            before = angles;
+            passed = changed < 0 ? BvhBranch.Same : passed;
+            var angles = Follow(Convert(frame, delivered is { } own ? passed.Of(own) : null), frame);
+            (before, changed) = (angles, frame);
             Put(angles, (_, text) => text, line);
             return;
         }
 
         before = delivered ?? before;
+        changed = delivered is null ? changed : -1;
         if (delivered is { } moved && branch != BvhBranch.Same)
         {
             Put(moved, (k, text) => branch.Rewrite(line.Field(track.Columns[k]), k) ?? text, line);
@@ -99,6 +106,19 @@ internal sealed class BvhTrackWriter
             ? angles
             : throw new ArgumentException(
                 $"frame {frame} of joint '{track.Name}' turns about an axis for which the file has no channel", nameof(frame));
+    }
+
+    /// <summary>No triple leaps from the changed one before it.</summary>
+    private EulerAngles Follow(EulerAngles angles, int frame)
+    {
+        if (changed >= 0 && before is { } last && BvhLeaps.Between(last, angles) is { } leap
+            && Angle.Between(cleaned.Samples[changed], cleaned.Samples[frame]) <= MovedLittle)
+        {
+            passed = leap.After(passed);
+            return leap.Of(angles);
+        }
+
+        return angles;
     }
 
     private void Put(EulerAngles angles, Func<int, string, string> text, BvhLine line)

@@ -62,6 +62,21 @@ public sealed class BvhWriteTests
     }
 
     [Fact]
+    public void Smoothed_samples_that_pass_the_lock_make_no_leap_where_the_delivered_ones_jump_over_it()
+    {
+        // Delivered: from 87 degrees to 94.5, written as the other three angles, a turn too wide to be called a leap. Cleaned: steps of 2.
+        double[] delivered = [81, 83, 85, 87, 85.5, 84, 82, 81];
+        double[] cleaned = [81, 83, 85, 87, 89, 91, 93, 95];
+        var file = BvhTakes.Read(BvhTakes.Zyx([.. delivered.Select((b, n) => n < 4 ? $"10 {b} 20" : $"-170 {b} -160")]));
+        var through = cleaned.Select(b => Euler.ToQuat(EulerAngles.FromDegrees(10.1, b, 20), EulerOrder.ZYX)).ToArray();
+        var rows = BvhTakes.Rows(BvhTakes.Written(file, file.Take.With(0, n => through[n]))).Select(BvhTakes.Numbers).ToArray();
+        for (var n = 0; n < rows.Length; n++)
+        {
+            Assert.Equal([10.1, cleaned[n], 20], rows[n].Select(a => Math.Round(a, 8)));
+        }
+    }
+
+    [Fact]
     public void The_other_sign_of_a_sample_is_the_same_text()
     {
         var text = BvhTakes.Zyx("1 2 3", "4 5 6");
