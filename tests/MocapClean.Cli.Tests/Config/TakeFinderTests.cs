@@ -69,8 +69,12 @@ public sealed class TakeFinderTests : IDisposable
     [Fact]
     public void What_an_earlier_run_wrote_is_never_a_take()
     {
-        Write("a.csv", "out/takes/a.csv", "out/keys/a.csv.keys.csv", "out/reshoot.csv", "out/log/journal");
+        Write("a.csv", "out/takes/a.csv", "out/keys/a.csv.keys.csv", "out/reshoot.csv", "out/session.json", "out/log/journal");
         Assert.Equal(["a.csv"], Names("ingest: {takes: '**/*.csv'}"));
+        Assert.Equal(["a.csv"], Names("ingest: {takes: .}"));
+        var list = Find("ingest: {takes: '**'}");
+        Assert.Equal(["a.csv"], list.Takes.Select(t => t.Name));
+        Assert.Empty(list.Notes);
     }
 
     [Theory]

@@ -102,15 +102,16 @@ public sealed class TakeFinder
             return false;
         }
 
-        if (output.Holds(path) || output.Holds(real))
+        var isInOutput = output.Holds(path) || output.Holds(real);
+        if (FormatCatalog.For(path) is null)
+        {
+            return search.IsAsked && !isInOutput && Note($"{Relative(path)}: no format reads '{Path.GetExtension(path)}' files");
+        }
+
+        if (isInOutput)
         {
             var holds = $"output folder '{config.Output.Folder}' already holds takes ({Relative(path)})";
             return output.IsOwn(path, real) ? false : throw Problem("output.folder", $"{holds}; give it a folder of its own");
-        }
-
-        if (FormatCatalog.For(path) is null)
-        {
-            return search.IsAsked && Note($"{Relative(path)}: no format reads '{Path.GetExtension(path)}' files");
         }
 
         if (!RealPath.IsWithin(path, root))
