@@ -14,13 +14,13 @@ public sealed class BadTakeTests
         { "ragged", Takes.Wide(60, (n, row) => n == 7 ? row + ",1" : row), "row" },
         { "duplicate joint", Takes.Wide().Replace("b.q", "a.q", StringComparison.Ordinal), "a.qw" },
         { "component missing", Takes.Wide().Replace("b.qz", "b.zz", StringComparison.Ordinal), "b" },
-        { "text in a number", Takes.Wide(60, (n, row) => n == 7 ? row.Replace("0.07,", "0.07,abc", StringComparison.Ordinal) : row), "abc" },
-        { "decimal comma", Takes.Wide(60, (n, row) => n == 7 ? row.Replace("0.07,", "\"0,07\",", StringComparison.Ordinal) : row), "0,07" },
+        { "text in a number", Takes.Wide(60, (n, row) => n == 7 ? row.Replace("0.0700,", "0.0700,abc", StringComparison.Ordinal) : row), "abc" },
+        { "decimal comma", Takes.Wide(60, (n, row) => n == 7 ? row.Replace("0.0700,", "\"0,07\",", StringComparison.Ordinal) : row), "0,07" },
         { "unclosed quote", Takes.Wide(60, (n, row) => n == 7 ? "\"" + row : row), "quot" },
         { "no joint", "time,x,y\n0,1,2\n0.1,1,2\n", "joint" },
         { "no frame", Takes.Wide(0), "frame" },
-        { "a clock that never moves", Takes.Wide(60, (_, row) => "0.5" + row[4..]), "time" },
-        { "time that is no number", Takes.Wide(60, (n, row) => n == 3 ? "soon" + row[4..] : row), "soon" },
+        { "a clock that never moves", Takes.Wide(60, (_, row) => "0.5" + row[6..]), "time" },
+        { "time that is no number", Takes.Wide(60, (n, row) => n == 3 ? "soon" + row[6..] : row), "soon" },
     };
 
     [Theory]
@@ -57,9 +57,9 @@ public sealed class BadTakeTests
     public void Odd_data_is_processed_with_findings()
     {
         using var folder = new TempFolder();
-        folder.Put("in/zeros.csv", Takes.Wide(60, (n, row) => n is >= 20 and < 24 ? $"{n / 100.0:0.00},0,0,0,0,nan,0,0,0" : row));
-        folder.Put("in/stands.csv", Takes.Wide(60, (n, row) => n is >= 20 and < 24 ? "0.19" + row[4..] : row));
-        folder.Put("in/back.csv", Takes.Wide(60, (n, row) => n is 30 ? "0.10" + row[4..] : row));
+        folder.Put("in/zeros.csv", Takes.Wide(60, (n, row) => n is >= 20 and < 24 ? $"{n / 100.0:0.0000},0,0,0,0,nan,0,0,0" : row));
+        folder.Put("in/stands.csv", Takes.Wide(60, (n, row) => n is >= 20 and < 24 ? "0.1900" + row[6..] : row));
+        folder.Put("in/back.csv", Takes.Wide(60, (n, row) => n is 30 ? "0.1000" + row[6..] : row));
         folder.Put("in/one-frame.csv", Takes.Wide(1));
         folder.Put("in/one-joint.csv", "time,a.qw,a.qx,a.qy,a.qz\n0,1,0,0,0\n0.01,1,0,0,0\n0.02,1,0,0,0\n");
         var result = Tool.Run("run", folder["in"], "--out", folder["out"]);

@@ -18,7 +18,7 @@ internal static class Takes
             var (a, b) = (0.3 * Math.Sin(n / 15.0), 0.2 * Math.Cos(n / 11.0));
             text.Append(spoil(n, string.Create(
                 CultureInfo.InvariantCulture,
-                $"{n / 100.0:0.00},{Math.Cos(a):0.00000000},{Math.Sin(a):0.00000000},0,0,{Math.Cos(b):0.00000000},0,{Math.Sin(b):0.00000000},0"))).Append('\n');
+                $"{n / 100.0:0.0000},{Math.Cos(a):0.00000000},{Math.Sin(a):0.00000000},0,0,{Math.Cos(b):0.00000000},0,{Math.Sin(b):0.00000000},0"))).Append('\n');
         }
 
         return text.ToString();
