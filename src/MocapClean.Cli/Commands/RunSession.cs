@@ -114,6 +114,11 @@ internal sealed class RunSession(Terminal terminal)
         }
         else if (!options.Quiet)
         {
+            foreach (var note in summary.Notes)
+            {
+                log.Warning("{Take}: {Note}", summary.Take, note);
+            }
+
             terminal.Result(RunSummary.Line(summary, kept));
         }
     }

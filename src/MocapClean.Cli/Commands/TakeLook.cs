@@ -45,7 +45,7 @@ internal sealed record TakeLook
     {
         var clock = Take.Clock;
         yield return $"{Path}: {Take.Tracks.Length} joints, {Take.Length} frames, {clock.Rate:0.###} Hz{(clock.IsRegular ? "" : " (irregular clock)")}, {Take.Length / clock.Rate:0.00} s, {(Take.Space == OrientationSpace.World ? "world" : "local")} orientations";
-        foreach (var note in Guess?.Notes ?? [])
+        foreach (var note in (Guess?.Notes ?? []).Concat(Take.Notes))
         {
             yield return $"  {note}";
         }

@@ -52,6 +52,9 @@ public sealed record TakeSummary
     /// <summary>Keys in all and what playing them back measured.</summary>
     public KeyFigures Keys { get; init; } = new(0, null, null);
 
+    /// <summary>What the format had to say about the file.</summary>
+    public ImmutableArray<string> Notes { get; init; } = [];
+
     /// <summary>What to shoot again or to look at.</summary>
     public ImmutableArray<WindowSummary> Windows { get; init; } = [];
 
@@ -83,6 +86,7 @@ public sealed record TakeSummary
             Samples = SampleCounts.Of(report.Diff),
             Findings = FindingCount.Of(take.Findings),
             Keys = KeyFigures.Of(report.Keys),
+            Notes = take.Notes,
             Windows = [.. judgement.Windows.Select(w => WindowSummary.Of(w, labels))],
             PerJoint = [.. take.Tracks.Select((t, j) => JointSummary.Of(t, report.Diff.Joints[j], report.Keys[j]))],
         };

@@ -43,7 +43,8 @@ public static class SignContinuity
             breaks = [.. breaks.Concat(open).Order()];
         }
 
-        return (track with { Samples = Apply(track, flips), Breaks = breaks }, [.. kept, .. rows.OrderBy(r => r.First)]);
+        var told = track.HasSigns ? rows.OrderBy(r => r.First) : Enumerable.Empty<Finding>();
+        return (track with { Samples = Apply(track, flips), Breaks = breaks }, [.. kept, .. told]);
     }
 
     private static Finding Row(int joint, int first, int last, FaultAction action) =>

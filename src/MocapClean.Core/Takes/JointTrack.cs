@@ -30,6 +30,9 @@ public sealed record JointTrack
     /// <summary>Frames whose delivered length was so far from 1 that the written text must change even where the direction does not.</summary>
     public ImmutableArray<int> Renormalised { get; init; } = [];
 
+    /// <summary>The source writes quaternions, so that q and -q are two texts; angles have no sign to flip.</summary>
+    public bool HasSigns { get; init; } = true;
+
     /// <summary>A new value comes only every n-th frame (1: every frame).</summary>
     public int UpdateEvery { get; init; } = 1;
 

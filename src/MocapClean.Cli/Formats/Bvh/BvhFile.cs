@@ -27,7 +27,7 @@ internal sealed class BvhFile : ITakeFile
             Space = space,
             Skeleton = BvhSkeleton.Of(hierarchy),
             Findings = [.. tracks.SelectMany((t, j) => t.Findings(j, names))],
-            Notes = [.. hierarchy.Joints.Where(j => j.Rotations.Length == 2).Select(j =>
+            Notes = [.. Surplus(motion), .. hierarchy.Joints.Where(j => j.Rotations.Length == 2).Select(j =>
                 $"joint '{j.Name}' has two rotation channels: it is carried, not cleaned, and the take counts as one without bone vectors")],
         };
         Take = take with { TextRounding = BvhRounding.Of(source.Bytes, motion, AngleColumns(), take.TextRounding) };
@@ -51,10 +51,22 @@ internal sealed class BvhFile : ITakeFile
             throw new ArgumentException("the cleaned take has other joints or frames than the delivered one", nameof(cleaned));
         }
 
-        BvhWriter.Write(source.Bytes, motion, [.. tracks.Select((t, j) => new BvhTrackWriter(t, cleaned.Tracks[j]))], output);
+        BvhWriter.Write(source.Bytes, motion, [.. tracks.Select((t, j) => new BvhTrackWriter(t, cleaned.Tracks[j], Rebranches(cleaned, j)))], output);
     }
 
+    /// <summary>Nobody has decided to leave the leaps as delivered.</summary>
+    private static bool Rebranches(Take cleaned, int joint) =>
+        cleaned.Findings.Any(f => f.Joint == joint && f is { Kind: FaultKind.SignFlip, Action: FaultAction.Flipped, Note.Length: > 0 });
+
     private HashSet<int> AngleColumns() => [.. tracks.SelectMany(t => t.Columns)];
+
+    private static IEnumerable<string> Surplus(BvhMotion motion)
+    {
+        if (motion.Surplus > 0)
+        {
+            yield return $"{motion.Surplus} {(motion.Surplus == 1 ? "line" : "lines")} of values more than 'Frames:' says: carried, not cleaned";
+        }
+    }
 
     private string Text(int frame, int column)
     {

@@ -8,6 +8,9 @@ namespace MocapClean.Cli.Formats.Bvh;
 /// <param name="Values">All values, line after line; not finite where the text said so.</param>
 internal sealed record BvhMotion(double FrameTime, double FrameTimeRounding, int Columns, int[] LineStarts, double[] Values)
 {
+    /// <summary>Lines of values beyond the number of frames that the file states.</summary>
+    public long Surplus { get; init; }
+
     /// <summary>Number of frames.</summary>
     public int Frames => LineStarts.Length;
 

@@ -30,9 +30,9 @@ internal sealed class BvhMotionReader(TakeSource source, ImmutableArray<string> 
             throw Fault($"line {lines.Number}, Frame Time", BvhText.Quote(text), $"a number of seconds above 0 (from {ShortestFrame} to {LongestFrame})");
         }
 
-        CheckCount(lines, frames);
+        var surplus = CountSurplus(lines, frames);
         var (starts, values) = ReadValues(ref lines, (int)frames);
-        return new BvhMotion(frameTime, BvhText.HalfUnit(BvhText.Decimals(text)), columns.Length, starts, values);
+        return new BvhMotion(frameTime, BvhText.HalfUnit(BvhText.Decimals(text)), columns.Length, starts, values) { Surplus = surplus };
     }
 
     private ReadOnlySpan<byte> ReadHeader(ref BvhLines lines, string key)
@@ -49,7 +49,8 @@ internal sealed class BvhMotionReader(TakeSource source, ImmutableArray<string> 
             : throw Fault($"line {lines.Number}", BvhText.Quote(text), $"'{key}:'");
     }
 
-    private void CheckCount(BvhLines lines, long expected)
+    /// <summary>A file with fewer lines than it says is not whole; lines beyond those are no harm.</summary>
+    private long CountSurplus(BvhLines lines, long expected)
     {
         var found = 0L;
         while (lines.MoveNext())
@@ -57,10 +58,9 @@ internal sealed class BvhMotionReader(TakeSource source, ImmutableArray<string> 
             found++;
         }
 
-        if (found != expected)
-        {
-            throw Fault("MOTION", $"{found} lines of values", $"{expected}, as 'Frames:' says");
-        }
+        return found >= expected
+            ? found - expected
+            : throw Fault("MOTION", $"{found} lines of values", $"{expected}, as 'Frames:' says");
     }
 
     private (int[] Starts, double[] Values) ReadValues(ref BvhLines lines, int frames)

@@ -64,6 +64,7 @@ internal sealed class BvhTrack
         Name = Name,
         Delivered = Delivered,
         Samples = Delivered,
+        HasSigns = false,
         States = ImmutableCollectionsMarshal.AsImmutableArray(new SampleState[Delivered.Length]),
     };
 

@@ -24,6 +24,7 @@ internal sealed class BvhTrackWriter
 
     private readonly BvhTrack track;
     private readonly JointTrack cleaned;
+    private readonly bool rebranch;
     private EulerAngles? before;
 
     /// <summary>The changed sample before, -1 behind a delivered one; and the branch that its run has come to.</summary>
@@ -35,8 +36,10 @@ internal sealed class BvhTrackWriter
     /// <summary>For one track.</summary>
     /// <param name="track">As delivered.</param>
     /// <param name="cleaned">After the stages.</param>
-    public BvhTrackWriter(BvhTrack track, JointTrack cleaned)
+    /// <param name="rebranch">Bring frames behind a leap back to the branch before it.</param>
+    public BvhTrackWriter(BvhTrack track, JointTrack cleaned, bool rebranch)
     {
+        this.rebranch = rebranch;
         this.track = track;
         this.cleaned = cleaned;
         before = FirstPresent();
@@ -78,7 +81,7 @@ internal sealed class BvhTrackWriter
             run++;
         }
 
-        return run < track.Runs.Length && track.Runs[run].First <= frame ? track.Runs[run].Branch : BvhBranch.Same;
+        return rebranch && run < track.Runs.Length && track.Runs[run].First <= frame ? track.Runs[run].Branch : BvhBranch.Same;
     }
 
     private EulerAngles? FirstPresent()

@@ -111,4 +111,25 @@ public sealed class BvhWriteTests
         Assert.Throws<ArgumentException>(() => BvhTakes.Written(file, shorter));
         Assert.Throws<ArgumentException>(() => BvhTakes.Written(file, file.Take with { Tracks = [] }));
     }
+
+    [Fact]
+    public void Lines_beyond_the_stated_frames_are_carried_with_a_note()
+    {
+        var text = BvhTakes.Zyx("0 0 0", "1 0 0", "2 0 0").Replace("Frames: 3", "Frames: 2", StringComparison.Ordinal);
+        var file = BvhTakes.Read(text);
+        Assert.Equal(2, file.Take.Length);
+        Assert.Contains("1 line of values more", Assert.Single(file.Take.Notes), StringComparison.Ordinal);
+        Assert.Equal(text, BvhTakes.Written(file, file.Take));
+    }
+
+    [Fact]
+    public void A_leap_that_was_left_stays_as_delivered()
+    {
+        var text = BvhTakes.Zyx("178 0 0", "179 0 0", "-180 0 0", "-179 0 0", "-178 0 0", "-177 0 0");
+        var file = BvhTakes.Read(text);
+        var leap = Assert.Single(file.Take.Findings);
+        Assert.NotEqual(text, BvhTakes.Written(file, file.Take));
+        var left = file.Take with { Findings = [leap with { Action = MocapClean.Core.Takes.FaultAction.Noted }] };
+        Assert.Equal(text, BvhTakes.Written(file, left));
+    }
 }
