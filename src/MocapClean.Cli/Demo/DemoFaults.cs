@@ -27,40 +27,56 @@ internal sealed class DemoFaults(SeededNumbers numbers, List<DemoTruth> truth)
 
     private void Put(string joint, Quat[] track, string kind, int from, int to)
     {
-        var room = to - from;
+        var count = Length(kind, to - from);
+        var first = numbers.Whole(from, to - count);
         switch (kind)
         {
             case "sign-flip":
-                Over(joint, track, kind, from, numbers.Whole(1, room), 0, q => -q);
+                Over(joint, track, kind, first, count, 0, q => -q);
                 break;
             case "spike":
-                Spike(joint, track, from, numbers.Whole(1, Math.Min(8, room)), numbers.Uniform(0, 1) < 0.25 ? numbers.Uniform(0.5, 3) : numbers.Uniform(4, 120));
+                Spike(joint, track, first, count, numbers.Uniform(0, 1) < 0.25 ? numbers.Uniform(0.5, 3) : numbers.Uniform(4, 120));
                 break;
             case "step":
-                Turned(joint, track, kind, from, track.Length - from, numbers.Uniform(8, 90));
+                Turned(joint, track, kind, first, track.Length - first, numbers.Uniform(8, 90));
                 break;
             case "offset":
-                Turned(joint, track, kind, from, numbers.Whole(Math.Min(15, room), room), numbers.Uniform(6, 60));
+                Turned(joint, track, kind, first, count, numbers.Uniform(6, 60));
                 break;
-            case "gap":
-                Over(joint, track, kind, from, numbers.Whole(1, Math.Min(50, room)), 0, _ => Quat.Missing);
-                break;
-            case "long-gap":
-                Over(joint, track, "gap", from, room, 0, _ => Quat.Missing);
+            case "gap" or "long-gap":
+                Over(joint, track, "gap", first, count, 0, _ => Quat.Missing);
                 break;
             case "zeros":
-                Over(joint, track, "gap", from, numbers.Whole(1, Math.Min(20, room)), 0, _ => default);
+                Over(joint, track, "gap", first, count, 0, _ => default);
                 break;
             case "freeze":
-                Freeze(joint, track, from, numbers.Whole(Math.Min(10, room), Math.Min(40, room)));
+                Freeze(joint, track, first, count);
                 break;
             case "off-unit":
                 var scale = numbers.Uniform(0, 1) < 0.5 ? 0.9 : 1.15;
-                Over(joint, track, kind, from, numbers.Whole(Math.Min(10, room), room), 0, q => scale * q);
+                Over(joint, track, kind, first, count, 0, q => scale * q);
                 break;
             default:
                 throw new ArgumentOutOfRangeException(nameof(kind), kind, "no such fault");
         }
+    }
+
+    /// <summary>How many frames a fault of a kind lasts, within the room there is.</summary>
+    private int Length(string kind, int room)
+    {
+        var (least, most) = kind switch
+        {
+            "spike" => (1, 8),
+            "step" => (1, 1),
+            "offset" => (15, 150),
+            "gap" => (1, 50),
+            "long-gap" => (80, 140),
+            "zeros" => (1, 20),
+            "freeze" => (10, 40),
+            "off-unit" => (10, 200),
+            _ => (1, 120),
+        };
+        return numbers.Whole(Math.Min(least, room), Math.Min(most, room));
     }
 
     private void Over(string joint, Quat[] track, string kind, int first, int count, double degrees, Func<Quat, Quat> change)
