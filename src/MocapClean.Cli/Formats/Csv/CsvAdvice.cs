@@ -1,3 +1,5 @@
+using System.Text;
+
 namespace MocapClean.Cli.Formats.Csv;
 
 /// <summary>Complaints that a table is laid out otherwise than the settings say, with what would fit it.</summary>
@@ -10,7 +12,9 @@ internal static class CsvAdvice
         var found = settings.CsvLayout == "long"
             ? $"no header with columns joint, frame or {settings.CsvTime}, {components}"
             : $"no column named like '{settings.CsvJointColumns}' with {components}";
-        var expected = CsvGuess.From(source, start) is { } guess ? $"those; this file would fit {guess.Settings}" : "a header with such columns";
+        var expected = CsvGuess.From(source, start) is { } guess
+            ? $"those; this file would fit {guess.Settings}"
+            : $"a header with such columns (the first line is '{FirstLine(source.Bytes.AsSpan(start))}')";
         return new InputFormatException(source.Name, "", found, expected);
     }
 
@@ -22,6 +26,13 @@ internal static class CsvAdvice
             source.Name,
             header.Place(source),
             $"no column '{settings.CsvTime}' for the time",
-            $"one, or frames per second as ingest.rate{(likely is null ? "" : $"; column '{likely}' may be meant (ingest.csv.time)")}");
+            $"one, or frames per second as ingest.rate{(likely is null ? "" : $"; column '{CsvText.Shown(likely)}' may be meant (ingest.csv.time)")}");
+    }
+
+    private static string FirstLine(ReadOnlySpan<byte> bytes)
+    {
+        var text = bytes.TrimStart("\r\n"u8);
+        var end = text.IndexOfAny((byte)'\r', (byte)'\n');
+        return CsvText.Shown(Encoding.UTF8.GetString(text[..Math.Min(end < 0 ? text.Length : end, 1000)]));
     }
 }

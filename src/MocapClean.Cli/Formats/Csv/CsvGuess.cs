@@ -58,7 +58,7 @@ public sealed record CsvGuess
 
     internal static CsvGuess? From(TakeSource source, int start)
     {
-        var header = CsvHeader.Search(source.Bytes, start, names => NamingGuess.All(names).Length > 0 ? 1 + names.Length : 0);
+        var header = CsvHeader.Search(source.Bytes, start, names => NamingGuess.All(names).Any() ? names.Length : 0);
         foreach (var naming in header is null ? [] : NamingGuess.All(header.Names))
         {
             var columns = new CsvColumns(naming.Joints, naming.Slots, Time: -1);

@@ -73,7 +73,7 @@ internal sealed record CsvHeader(ImmutableArray<string> Names, char Separator, i
     public InputFormatException Twice(TakeSource source, int first, int second) => new(
         source.Name,
         Place(source),
-        $"columns {first + 1} and {second + 1} both named '{Names[second]}'",
+        $"columns {first + 1} and {second + 1} both named '{CsvText.Shown(Names[second])}'",
         "that name once");
 
     private static CsvHeader? FirstFit(

@@ -86,6 +86,6 @@ internal sealed class CsvLayout
     private InputFormatException Incomplete(CsvHeader header, ColumnPattern pattern, string joint, int component) => new(
         source.Name,
         header.Place(source),
-        $"no column '{pattern.ColumnOf(joint, component)}'",
-        $"all four components of joint '{joint}' ({string.Join(", ", settings.CsvComponents)})");
+        $"no column '{CsvText.Shown(pattern.ColumnOf(joint, component))}'",
+        $"all four components of joint '{CsvText.Shown(joint)}' ({string.Join(", ", settings.CsvComponents)})");
 }

@@ -27,7 +27,7 @@ internal sealed class CsvRows : IDisposable
         {
             Separator = header.Separator,
             HasHeader = false,
-            CommentPrefix = '#',
+            CommentPrefix = HashStartsRow(columns) ? null : '#',
             MalformedData = CsvMalformedDataHandling.Throw,
             FormatProvider = decimalComma ? NumberText.Comma : NumberText.Point,
         });
@@ -39,14 +39,14 @@ internal sealed class CsvRows : IDisposable
     /// <summary>Numbers are written with a comma.</summary>
     public bool DecimalComma { get; }
 
-    /// <summary>Rows that fit into the rest of the file at most, from its line breaks and its number of columns.</summary>
+    /// <summary>Rows that the rest of the file has by its line breaks and its number of columns; comments and blank lines count.</summary>
     public int Estimate
     {
         get
         {
-            var rest = source.Bytes.AsSpan(header.End);
+            var rest = source.Bytes.AsSpan(header.End).TrimEnd("\r\n"u8);
             var breaks = Math.Max(rest.Count((byte)'\n'), rest.Count((byte)'\r'));
-            return 1 + Math.Min(breaks, rest.Length / header.Names.Length);
+            return Math.Max(1, Math.Min(breaks, rest.Length / header.Names.Length));
         }
     }
 
@@ -111,11 +111,11 @@ internal sealed class CsvRows : IDisposable
 
     /// <summary>The complaint about a field of the current row.</summary>
     public InputFormatException Wrong(int column, string found, string expected) =>
-        new(source.Name, $"{Place()}, column '{header.Names[column]}'", found, expected);
+        new(source.Name, $"{Place()}, column '{CsvText.Shown(header.Names[column])}'", found, expected);
 
     /// <summary>The complaint that a field holds something else.</summary>
     public InputFormatException Unreadable(int column, string expected) =>
-        Wrong(column, Text(column).IsEmpty ? "an empty cell" : $"'{TextOf(column)}'", expected);
+        Wrong(column, Text(column).IsEmpty ? "an empty cell" : $"'{CsvText.Shown(TextOf(column))}'", expected);
 
     /// <summary>The complaint about the table as a whole.</summary>
     public InputFormatException Unusable(string found, string expected) => new(source.Name, "", found, expected);
@@ -169,7 +169,29 @@ internal sealed class CsvRows : IDisposable
             source.Name,
             Place(),
             $"{Count(reader.FieldCount)}{(cut ? ", where the file breaks off" : "")}",
-            $"{Count(header.Names.Length)} as in the header");
+            $"{Count(header.Names.Length)} as in the header{(LooksSplit() ? " (a decimal comma splits a number where commas part the fields)" : "")}");
+    }
+
+    private bool LooksSplit() => header.Separator == ',' && reader.FieldCount > 1.5 * header.Names.Length;
+
+    /// <summary>
+    /// Whether the mark of comments may also start a row: a spreadsheet writes "#N/A" for a number, and a joint may be called "#1". Where
+    /// such a line has the fields of a row, none is taken for a comment, so that no sample is passed over in silence.
+    /// </summary>
+    private bool HashStartsRow(CsvColumns columns)
+    {
+        var rest = columns.Joint == 0 || columns.Slots.Contains(0) ? source.Bytes.AsSpan(header.End) : [];
+        for (var at = rest.IndexOf("\n#"u8); at >= 0; at = rest.IndexOf("\n#"u8))
+        {
+            rest = rest[(at + 1)..];
+            var length = rest.IndexOf((byte)'\n');
+            if ((length < 0 ? rest : rest[..length]).Count((byte)header.Separator) == header.Names.Length - 1)
+            {
+                return true;
+            }
+        }
+
+        return false;
     }
 
     /// <summary>The reader names the byte where it noticed: for an open quote that is the end, so the search for it starts at the row.</summary>

@@ -25,6 +25,14 @@ internal static class CsvText
         return 1 + before.Count((byte)'\n') + before.Count((byte)'\r') - pairs;
     }
 
+    /// <summary>Delivered text as it may stand in a message: on one line and not long.</summary>
+    public static string Shown(string text)
+    {
+        const int Longest = 60;
+        var line = string.Concat(text.Take(Longest).Select(c => char.IsControl(c) ? ' ' : c));
+        return text.Length > Longest ? line + "..." : line;
+    }
+
     private static string? Foreign(ReadOnlySpan<byte> bytes)
     {
         if (bytes.StartsWith((ReadOnlySpan<byte>)[0x1f, 0x8b]))

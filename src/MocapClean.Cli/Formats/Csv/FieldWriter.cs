@@ -1,4 +1,4 @@
-using MocapClean.Core.Orientation;
+using System.Runtime.CompilerServices;
 
 namespace MocapClean.Cli.Formats.Csv;
 
@@ -7,10 +7,10 @@ internal sealed class FieldWriter(CsvRows rows, SplicedOutput output, char separ
 {
     private readonly byte mark = rows.DecimalComma ? (byte)',' : (byte)'.';
 
-    /// <summary>Writes a component of an orientation into a field of the current row.</summary>
-    public void Write(int column, in Quat sample, int component)
+    /// <summary>Writes a number into a field of the current row.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    public void Write(int column, double value)
     {
-        var value = component switch { 0 => sample.W, 1 => sample.X, 2 => sample.Y, _ => sample.Z };
         var raw = rows.Raw(column, out var offset);
         var (first, last) = NumberWithin(raw);
         output.Replace(offset + first, offset + last);

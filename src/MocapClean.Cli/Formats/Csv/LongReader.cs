@@ -28,9 +28,9 @@ internal sealed class LongReader
     {
         this.rows = rows;
         this.columns = columns;
-        reader = new SampleReader(rows, columns);
         keys = new RowKeys();
         rowJoints.Capacity = rowFrames.Capacity = samples.Capacity = rows.Estimate;
+        reader = new SampleReader(rows, columns, samples.Capacity);
     }
 
     private int Key => columns.Frame >= 0 ? columns.Frame : columns.Time;
@@ -118,7 +118,7 @@ internal sealed class LongReader
         }
 
         return rows.Unusable(
-            $"joint '{keys.Joints[places.Joints[second]]}' in rows {first + 1} and {second + 1} of one frame",
+            $"joint '{CsvText.Shown(keys.Joints[places.Joints[second]])}' in rows {first + 1} and {second + 1} of one frame",
             "one row for a joint and frame");
     }
 }

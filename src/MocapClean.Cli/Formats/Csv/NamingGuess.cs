@@ -16,20 +16,25 @@ internal sealed record NamingGuess(
     /// <summary>The components are numbers, of which one cannot see whether the first or the last is w.</summary>
     public bool IsNumbered => Components[0][^1] == '0';
 
-    /// <summary>All ways that fit, the usual letters first, and of those the ones with most joints first.</summary>
-    public static ImmutableArray<NamingGuess> All(ImmutableArray<string> names)
+    /// <summary>All ways that fit, the usual letters first, and of those the ones with most names first. Found as they are asked for.</summary>
+    public static IEnumerable<NamingGuess> All(ImmutableArray<string> names)
     {
+        if (names.Length < 4)
+        {
+            return [];
+        }
+
         // A name that starts like a number is no name but a row.
         var words = names.Where(n => n.Length > 0 && !char.IsAsciiDigit(n[0]) && n[0] is not ('-' or '+' or '.'))
             .ToHashSet(StringComparer.Ordinal);
-        return [.. Alphabets.SelectMany(letters => Of(names, words, letters))];
+        return Alphabets.SelectMany(letters => Of(names, words, letters));
     }
 
     private static IEnumerable<NamingGuess> Of(ImmutableArray<string> names, HashSet<string> words, string letters) => words
         .SelectMany(name => NameReading.All(name, letters, words))
         .GroupBy(r => (r.Before, r.After, r.Prefix))
-        .Select(g => Build(names, [.. g], letters))
-        .OrderByDescending(g => g.Joints.Length);
+        .OrderByDescending(g => g.Count())
+        .Select(g => Build(names, [.. g], letters));
 
     private static NamingGuess Build(ImmutableArray<string> names, ImmutableArray<NameReading> readings, string letters)
     {

@@ -5,7 +5,7 @@ using MocapClean.Core.Orientation;
 namespace MocapClean.Cli.Formats.Csv;
 
 /// <summary>Reads orientations and times off the current row, and notes how finely they are printed.</summary>
-internal sealed class SampleReader(CsvRows rows, CsvColumns columns)
+internal sealed class SampleReader(CsvRows rows, CsvColumns columns, int estimate)
 {
     /// <summary>Rows, spread over the table, whose digits are counted.</summary>
     private const int RowsCounted = 128;
@@ -19,7 +19,7 @@ internal sealed class SampleReader(CsvRows rows, CsvColumns columns)
     private readonly ImmutableArray<int> slots = columns.Slots;
     private readonly PrintedDigits components = new();
     private readonly PrintedDigits times = new();
-    private readonly int stride = Math.Max(1, rows.Estimate / RowsCounted);
+    private readonly int stride = Math.Max(1, estimate / RowsCounted);
     private readonly string expected = rows.DecimalComma
         ? "a number with a decimal comma, as before, or an empty cell"
         : "a number or an empty cell";
@@ -37,8 +37,9 @@ internal sealed class SampleReader(CsvRows rows, CsvColumns columns)
         var at = 4 * joint;
         if (rows.TryNumber(slots[at], out var w) & rows.TryNumber(slots[at + 1], out var x)
             & rows.TryNumber(slots[at + 2], out var y) & rows.TryNumber(slots[at + 3], out var z)
-            && double.IsFinite(w) && double.IsFinite(x) && double.IsFinite(y) && double.IsFinite(z))
+            && double.IsFinite((w + x) + (y + z)))
         {
+            // A sum is finite only if its terms are. Terms that are, and whose sum is not, have no length either.
             return new Quat(w, x, y, z);
         }
 

@@ -45,6 +45,13 @@ internal sealed class SplicedOutput(byte[] delivered, Stream output) : IDisposab
 
     private void CopyTo(int end)
     {
+        // Between two numbers there is mostly one separator.
+        if (end - copied == 1 && used < buffer.Length)
+        {
+            buffer[used++] = delivered[copied++];
+            return;
+        }
+
         var stretch = delivered.AsSpan(copied, end - copied);
         if (stretch.Length > buffer.Length - used)
         {

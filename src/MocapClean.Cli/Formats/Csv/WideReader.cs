@@ -9,23 +9,42 @@ internal static class WideReader
     /// <summary>Reads all rows.</summary>
     public static CsvContent Read(CsvRows rows, CsvColumns columns)
     {
-        var reader = new SampleReader(rows, columns);
+        var estimate = rows.Estimate;
+        var reader = new SampleReader(rows, columns, estimate);
         var tracks = new Quat[columns.Joints.Length][];
-        var times = columns.Time >= 0 ? new double[rows.Estimate] : null;
-        var (frames, room) = (0, rows.Estimate);
-        Resize(tracks, room);
+        for (var joint = 0; joint < tracks.Length; joint++)
+        {
+            tracks[joint] = GC.AllocateUninitializedArray<Quat>(estimate);
+        }
+
+        var times = columns.Time >= 0 ? new double[estimate] : null;
+        var frames = ReadRows(rows, reader, tracks, ref times, columns.Time);
+        Resize(tracks, ref times, frames);
+        return new CsvContent
+        {
+            Joints = columns.Joints,
+            Samples = [.. tracks.Select(ImmutableCollectionsMarshal.AsImmutableArray)],
+            Times = times,
+            TimeRounding = times is null ? 0 : reader.TimeRounding,
+            ComponentRounding = reader.ComponentRounding,
+            DecimalComma = rows.DecimalComma,
+        };
+    }
+
+    /// <summary>Nearly all time of reading goes by in here.</summary>
+    private static int ReadRows(CsvRows rows, SampleReader reader, Quat[][] tracks, ref double[]? times, int timeColumn)
+    {
+        var frames = 0;
         while (rows.Next())
         {
-            if (frames == room)
+            if (frames == tracks[0].Length)
             {
-                room *= 2;
-                Resize(tracks, room);
-                Array.Resize(ref times, times is null ? 0 : room);
+                Resize(tracks, ref times, 2 * frames);
             }
 
-            if (columns.Time >= 0)
+            if (times is not null)
             {
-                times![frames] = reader.Time(columns.Time);
+                times[frames] = reader.Time(timeColumn);
             }
 
             for (var joint = 0; joint < tracks.Length; joint++)
@@ -37,23 +56,19 @@ internal static class WideReader
             frames++;
         }
 
-        Resize(tracks, frames);
-        return new CsvContent
-        {
-            Joints = columns.Joints,
-            Samples = [.. tracks.Select(ImmutableCollectionsMarshal.AsImmutableArray)],
-            Times = columns.Time >= 0 ? times![..frames] : null,
-            TimeRounding = columns.Time >= 0 ? reader.TimeRounding : 0,
-            ComponentRounding = reader.ComponentRounding,
-            DecimalComma = rows.DecimalComma,
-        };
+        return frames;
     }
 
-    private static void Resize(Quat[][] tracks, int length)
+    private static void Resize(Quat[][] tracks, ref double[]? times, int length)
     {
         for (var joint = 0; joint < tracks.Length; joint++)
         {
             Array.Resize(ref tracks[joint], length);
+        }
+
+        if (times is not null)
+        {
+            Array.Resize(ref times, length);
         }
     }
 }

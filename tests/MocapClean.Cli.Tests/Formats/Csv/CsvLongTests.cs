@@ -58,6 +58,15 @@ public sealed class CsvLongTests
     }
 
     [Fact]
+    public void A_joint_may_be_called_like_a_comment()
+    {
+        var file = Table.Read("joint,time,qw,qx,qy,qz\n#1,0,1,0,0,0\n#2,0,1,0,0,0\n#1,1,1,0,0,0\n#2,1,0,1,0,0\n");
+
+        Assert.Equal(["#1", "#2"], file.Take.Tracks.Select(t => t.Name));
+        Assert.Equal([Quat.Identity, I], file.Samples("#2"));
+    }
+
+    [Fact]
     public void A_wide_layout_asked_for_does_not_read_a_long_table() => Assert.Contains(
         "this file would fit layout: long, components: [qw, qx, qy, qz]",
         Table.Refusal("joint,time,qw,qx,qy,qz\na,0,1,0,0,0\na,1,1,0,0,0\n", new ReadSettings { CsvLayout = "wide" }),

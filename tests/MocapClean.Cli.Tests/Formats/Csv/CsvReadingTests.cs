@@ -80,6 +80,22 @@ public sealed class CsvReadingTests
     }
 
     [Fact]
+    public void A_spreadsheets_error_in_the_first_cell_is_a_missing_sample_and_no_comment()
+    {
+        var file = Table.Read("a.qw,a.qx,a.qy,a.qz\n1,0,0,0\n#N/A,#N/A,#N/A,#N/A\n1,0,0,0\n", new ReadSettings { Rate = 10 });
+
+        Assert.Equal([Quat.Identity, Quat.Missing, Quat.Identity], file.Samples());
+    }
+
+    [Fact]
+    public void Comments_may_stand_between_rows_that_start_with_a_component()
+    {
+        var file = Table.Read("a.qw,a.qx,a.qy,a.qz\n1,0,0,0\n# a \"pause\"\n1,0,0,0\n", new ReadSettings { Rate = 10 });
+
+        Assert.Equal(2, file.Take.Length);
+    }
+
+    [Fact]
     public void Joints_stand_in_the_order_of_their_first_columns_under_any_name()
     {
         var text = "time,b ü/(1).qx,a.b.qw,b ü/(1).qw,a.b.qx,a.b.qy,b ü/(1).qy,b ü/(1).qz,a.b.qz\n0,2,10,1,20,30,3,4,40\n1,2,10,1,20,30,3,4,40\n";

@@ -22,6 +22,14 @@ public sealed class CsvRefusalTests
     [InlineData(
         Good + "0.2,1", "t.csv, row 3 (line 4): found 2 fields, where the file breaks off, expected 5 fields as in the header")]
     [InlineData(
+        Table.Header + "\n0,0,1,0,0,0,0,0,0\n",
+        "t.csv, row 1 (line 2): found 9 fields, "
+        + "expected 5 fields as in the header (a decimal comma splits a number where commas part the fields)")]
+    [InlineData(
+        Table.Header + "\n0,\"two\nlines of text that go on and on and on and on and on and on and on\",0,0,0\n",
+        "t.csv, row 1 (line 2), column 'a.qw': "
+        + "found 'two lines of text that go on and on and on and on and on and...', expected a number or an empty cell")]
+    [InlineData(
         "#c\r\n\r\n" + Good + "0.2,1,0,abc,0\n",
         "t.csv, row 3 (line 6), column 'a.qy': found 'abc', expected a number or an empty cell")]
     [InlineData(
@@ -60,7 +68,8 @@ public sealed class CsvRefusalTests
         "t.csv, header (line 1): found no column 'b.qz', expected all four components of joint 'b' (qw, qx, qy, qz)")]
     [InlineData(
         "time,x,y\n0,1,2\n",
-        "t.csv: found no column named like '{joint}.{component}' with qw, qx, qy, qz, expected a header with such columns")]
+        "t.csv: found no column named like '{joint}.{component}' with qw, qx, qy, qz, expected a header with such columns "
+        + "(the first line is 'time,x,y')")]
     [InlineData(
         "time,Hips_QX,Hips_QY,Hips_QZ,Hips_QW\n0,0,0,0,1\n0.1,0,0,0,1\n",
         "t.csv: found no column named like '{joint}.{component}' with qw, qx, qy, qz, expected those; "

@@ -2,6 +2,8 @@ using System.Text;
 using FsCheck;
 using FsCheck.Fluent;
 using FsCheck.Xunit;
+using MocapClean.Cli.Formats;
+using MocapClean.Cli.Formats.Csv;
 using MocapClean.Core.Orientation;
 using Xunit;
 
@@ -16,17 +18,17 @@ public sealed class CsvRoundTripTests
     private static readonly string[] Gone = ["", " ", "\"\"", "NaN"];
 
     [Property(MaxTest = 300, Replay = "(123,457)")]
-    public Property Unchanged_takes_come_back_byte_for_byte(int seed)
+    public Property Unchanged_takes_come_back_byte_for_byte(DoNotSize<int> seed)
     {
-        var (text, _) = Random(seed);
+        var (text, _) = Random(seed.Item);
         var file = Table.Read(text);
         return Table.Write(file, file.Take).AsSpan().SequenceEqual(Table.Bytes(text)).Label(text);
     }
 
     [Property(MaxTest = 300, Replay = "(123,457)")]
-    public Property Changed_samples_are_read_back_and_all_others_stay(int seed)
+    public Property Changed_samples_are_read_back_and_all_others_stay(DoNotSize<int> seed)
     {
-        var (text, random) = Random(seed);
+        var (text, random) = Random(seed.Item);
         var file = Table.Read(text);
         var (joint, frame) = (random.Next(file.Take.Tracks.Length), random.Next(file.Take.Length));
         var sample = new Quat(random.NextDouble(), random.NextDouble(), random.NextDouble(), -random.NextDouble()).Normalised();
@@ -36,6 +38,34 @@ public sealed class CsvRoundTripTests
             .Select((s, n) => j == joint && n == frame ? (s.Second + (-1 * sample)).Norm < 1.1e-14 : s.First.Equals(s.Second)));
         return same.All(x => x).And(a.Clock.Delivered.SequenceEqual(b.Clock.Delivered))
             .And(file.Column("note")!.SequenceEqual(back.Column("note")!)).Label(text);
+    }
+
+    [Property(MaxTest = 2000, Replay = "(123,457)")]
+    public Property A_spoilt_file_is_refused_or_comes_back_byte_for_byte(DoNotSize<int> seed)
+    {
+        var (text, random) = Random(seed.Item);
+        var bytes = Table.Bytes(text);
+        for (var i = random.Next(1, 4); i > 0; i--)
+        {
+            var at = random.Next(bytes.Length);
+            bytes = random.Next(3) switch
+            {
+                0 => [.. bytes[..at], .. bytes[(at + 1)..]],
+                1 => [.. bytes[..at], (byte)random.Next(256), .. bytes[at..]],
+                _ => [.. bytes[..at], .. bytes[random.Next(at, bytes.Length)..], (byte)"\"\n,;#-.0"[random.Next(8)]],
+            };
+        }
+
+        try
+        {
+            CsvGuess.From(Table.Source(bytes));
+            var file = Table.Read(bytes);
+            return Table.Write(file, file.Take).AsSpan().SequenceEqual(bytes).Label(Convert.ToHexString(bytes));
+        }
+        catch (InputFormatException e)
+        {
+            return (!e.Message.Contains('\n', StringComparison.Ordinal) && e.Message.Length < 500).Label(e.Message);
+        }
     }
 
     [Theory]
