@@ -23,13 +23,16 @@ internal static class ConfigCatalog
     private static readonly Setting<SessionConfig> Title = new(
         "session", new Shape.Text(), "", "a title", (c, v) => c with { Title = v.Word })
     {
-        Unset = "name of the config", Example = "\"Duel, day 2\"",
+        Unset = "name of the config",
+        Example = "\"Duel, day 2\"",
     };
 
     private static readonly Setting<SessionConfig> NamesOfJoints = new(
         Names, new Shape.TextList(), "", "names of joints, or globs (* and ?)", (c, _) => c)
     {
-        IsRequired = true, Unset = "required", Example = "\"*Hand\"",
+        IsRequired = true,
+        Unset = "required",
+        Example = "\"*Hand\"",
     };
 
     private static readonly ImmutableArray<StageEntry> Stages = [.. StageCatalog.All.Where(s => s.Settings.Settings.Length > 0)];
@@ -37,7 +40,9 @@ internal static class ConfigCatalog
     /// <summary>The top of the config.</summary>
     public static KeyNode Root { get; } = new()
     {
-        Name = "", Path = "", Meaning = "",
+        Name = "",
+        Path = "",
+        Meaning = "",
         Children =
         [
             Leaf(Title),
@@ -56,7 +61,10 @@ internal static class ConfigCatalog
 
     private static KeyNode JointList() => new()
     {
-        Name = Joints, Path = Joints, IsList = true, Meaning = "Other settings for some joints; later entries win.",
+        Name = Joints,
+        Path = Joints,
+        IsList = true,
+        Meaning = "Other settings for some joints; later entries win.",
         Children =
         [
             Leaf(NamesOfJoints),

@@ -15,7 +15,9 @@ public static class ConfigSchema
     // Indented by two, in any culture and on any system the same; patterns stay readable.
     private static readonly JsonSerializerOptions Written = new()
     {
-        WriteIndented = true, NewLine = "\n", Encoder = JavaScriptEncoder.UnsafeRelaxedJsonEscaping,
+        WriteIndented = true,
+        NewLine = "\n",
+        Encoder = JavaScriptEncoder.UnsafeRelaxedJsonEscaping,
     };
 
     /// <summary>The schema, with a line end.</summary>

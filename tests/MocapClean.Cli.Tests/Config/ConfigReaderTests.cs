@@ -70,7 +70,11 @@ public sealed class ConfigReaderTests
         Assert.Equal(
             new OutliersSettings
             {
-                Threshold = 8, TopSpeed = Math.PI * 50, LongestSpike = Extent.Seconds(0.04), LongestOffset = Extent.Frames(12), Freeze = Extent.Frames(6),
+                Threshold = 8,
+                TopSpeed = Math.PI * 50,
+                LongestSpike = Extent.Seconds(0.04),
+                LongestOffset = Extent.Frames(12),
+                Freeze = Extent.Frames(6),
             },
             stages.Outliers);
         Assert.Equal(new FillSettings { Method = FillMethod.Slerp, Longest = Extent.Seconds(1), Widest = Math.PI / 4, Worst = Math.PI / 90 }, stages.Fill);

@@ -62,8 +62,11 @@ public sealed class SlateReader
     {
         using var csv = CsvReader.FromText(text, new CsvReaderOptions
         {
-            TrackLineNumbers = true, CommentPrefix = '#', TrimWhitespace = true,
-            MalformedData = CsvMalformedDataHandling.Throw, FieldCountMismatch = CsvFieldCountHandling.Throw,
+            TrackLineNumbers = true,
+            CommentPrefix = '#',
+            TrimWhitespace = true,
+            MalformedData = CsvMalformedDataHandling.Throw,
+            FieldCountMismatch = CsvFieldCountHandling.Throw,
         });
         try
         {
