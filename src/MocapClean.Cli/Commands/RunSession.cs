@@ -61,7 +61,7 @@ internal sealed class RunSession(Terminal terminal)
     {
         using var log = terminal.CreateLogger(file: null, options.Quiet);
         using var signals = new Signals();
-        var report = Pass(new Session(new DryOutput(), journal: null), plan, notes, options, log, signals);
+        var report = Pass(new SessionPass(new DryOutput(), journal: null), plan, notes, options, log, signals);
         RunSummary.Print(terminal, report, "nothing was written (--dry-run)");
         return Code(report, options, signals);
     }
@@ -78,7 +78,7 @@ internal sealed class RunSession(Terminal terminal)
             using var log = terminal.CreateLogger(output.Place("log/session.log"), options.Quiet);
             using var journal = Journal.Open(output.Place("log/journal.jsonl"), options.Fresh);
             using var signals = new Signals();
-            var session = new Session(output, journal);
+            var session = new SessionPass(output, journal);
             var report = Pass(session, plan, notes, options, log, signals);
             report = options.Follow ? Follow(config, session, report, options, log, signals) : report;
             RunSummary.Print(terminal, report, $"report: {output.Place("session.json")}");
@@ -91,7 +91,7 @@ internal sealed class RunSession(Terminal terminal)
     }
 
     private SessionReport Pass(
-        Session session, SessionPlan plan, ImmutableArray<string> notes, RunOptions options, ILogger log, Signals signals)
+        SessionPass session, SessionPlan plan, ImmutableArray<string> notes, RunOptions options, ILogger log, Signals signals)
     {
         foreach (var note in notes)
         {
@@ -124,7 +124,7 @@ internal sealed class RunSession(Terminal terminal)
     }
 
     /// <summary>Looks again and again for takes that are new or changed and whose size has settled.</summary>
-    private SessionReport Follow(SessionConfig config, Session session, SessionReport report, RunOptions options, ILogger log, Signals signals)
+    private SessionReport Follow(SessionConfig config, SessionPass session, SessionReport report, RunOptions options, ILogger log, Signals signals)
     {
         log.Information("following {Takes}; interrupt to end", string.Join(", ", config.Source.Takes));
         var settled = new SettledFiles();

@@ -21,7 +21,7 @@ internal static class ConfigCatalog
     private const string Ingest = "ingest";
 
     private static readonly Setting<SessionConfig> Title = new(
-        "session", new Shape.Text(), "", "a title", (c, v) => c with { Title = v.Word })
+        "session", new Shape.FreeText(), "", "a title", (c, v) => c with { Title = v.Word })
     {
         Unset = "name of the config",
         Example = "\"Duel, day 2\"",

@@ -81,9 +81,9 @@ public static class ConfigSchema
     {
         Shape.Choice choice => Words(choice.Words),
         Shape.Quantity quantity => Quantity(quantity),
-        Shape.Count count => new() { ["type"] = "integer", ["minimum"] = count.Low, ["maximum"] = count.High },
+        Shape.WholeNumber count => new() { ["type"] = "integer", ["minimum"] = count.Low, ["maximum"] = count.High },
         Shape.Flag => new() { ["type"] = "boolean" },
-        Shape.Text text => Text(text),
+        Shape.FreeText text => Text(text),
         Shape.WordList words => List(Words(words.Words), least: 1),
         Shape.TextList { Length: { } length } => List(Text(new()), length, length),
         _ => List(Text(new()), setting.IsRequired ? 1 : 0),
@@ -102,7 +102,7 @@ public static class ConfigSchema
     }
 
     // Nothing is typed in a config, so a text may look like a number or a truth.
-    private static JsonObject Text(Shape.Text text) => text.Holding is []
+    private static JsonObject Text(Shape.FreeText text) => text.Holding is []
         ? new() { ["type"] = Types("string", "number", "boolean"), ["pattern"] = "\\S" }
         : new() { ["type"] = "string", ["allOf"] = new JsonArray([.. text.Holding.Select(Holding)]) };
 

@@ -23,10 +23,10 @@ internal static class ShapeText
     {
         Shape.Choice choice => choice.Words is [var only] ? $"the word {only}" : "one of " + Either(choice.Words),
         Shape.Quantity quantity => Quantity(setting, quantity),
-        Shape.Count count => $"a whole number from {count.Low} to {count.High}",
+        Shape.WholeNumber count => $"a whole number from {count.Low} to {count.High}",
         Shape.Flag => "true or false",
-        Shape.Text { Holding: [] } => "a text",
-        Shape.Text text => $"a text with {string.Join(" and ", text.Holding)} in it",
+        Shape.FreeText { Holding: [] } => "a text",
+        Shape.FreeText text => $"a text with {string.Join(" and ", text.Holding)} in it",
         Shape.WordList words => $"a list of {Either(words.Words)}",
         Shape.TextList { Length: { } length } => $"a list of {length} different texts",
         _ => "a text or a list of texts",

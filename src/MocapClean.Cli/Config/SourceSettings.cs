@@ -32,7 +32,7 @@ public sealed record SourceSettings
         {
             Example = "\"**/*_calibration.csv\"",
         },
-        new("root", new Shape.Text(), "", "what relative output paths start from", (s, v) => s with { Root = v.Word })
+        new("root", new Shape.FreeText(), "", "what relative output paths start from", (s, v) => s with { Root = v.Word })
         {
             Unset = "deepest folder common to the fixed parts of the globs", Example = "takes",
         },
@@ -48,11 +48,11 @@ public sealed record SourceSettings
         },
         new("csv.layout", Shape.OneOf("auto", "wide", "long"), "auto", "wide: one row a frame; long: one row a joint and frame",
             (s, v) => s with { Read = s.Read with { CsvLayout = v.Word } }),
-        new("csv.joint-columns", new Shape.Text("{joint}", "{component}"), "\"{joint}.{component}\"",
+        new("csv.joint-columns", new Shape.FreeText("{joint}", "{component}"), "\"{joint}.{component}\"",
             "how a wide file names its orientation columns", (s, v) => s with { Read = s.Read with { CsvJointColumns = v.Word } }),
         new("csv.components", new Shape.TextList(Length: 4), "[qw, qx, qy, qz]", "names of the components in the order w, x, y, z",
             (s, v) => s with { Read = s.Read with { CsvComponents = v.List } }),
-        new("csv.time", new Shape.Text(), "time", "name of the time column, in seconds",
+        new("csv.time", new Shape.FreeText(), "time", "name of the time column, in seconds",
             (s, v) => s with { Read = s.Read with { CsvTime = v.Word } }),
     ]);
 }

@@ -28,9 +28,9 @@ public sealed record TimeCodeSettings
             (s, v) => s with { Rate = v.Word }) { Example = "25" },
         new("drop-frame", new Shape.Flag(), "false", "drop-frame counting, at 29.97 and 59.94",
             (s, v) => s with { IsDropFrame = v.Word == "true" }),
-        new("slates", new Shape.Text(), "", "CSV with take, frame, timecode and, where wanted, action_first, action_last",
+        new("slates", new Shape.FreeText(), "", "CSV with take, frame, timecode and, where wanted, action_first, action_last",
             (s, v) => s with { Slates = v.Word }) { Example = "slates.csv" },
-        new("column", new Shape.Text(), "", "carried column with each frame's address, in place of slates",
+        new("column", new Shape.FreeText(), "", "carried column with each frame's address, in place of slates",
             (s, v) => s with { Column = v.Word }) { Example = "timecode" },
     ]);
 

@@ -15,9 +15,9 @@ internal sealed class ValueReader(ProblemList problems)
         {
             (Shape.Choice choice, WordNode word) when !node.IsNothing => Choice(word.Text, choice, key),
             (Shape.Quantity quantity, WordNode word) when !node.IsNothing => Quantity(word.Text, quantity, key),
-            (Shape.Count count, WordNode word) when !node.IsNothing => Count(word.Text, count, key),
+            (Shape.WholeNumber count, WordNode word) when !node.IsNothing => Count(word.Text, count, key),
             (Shape.Flag, WordNode { IsPlain: true } word) => Flag(word.Text, key),
-            (Shape.Text text, WordNode word) when !node.IsNothing => Text(word.Text, text, key),
+            (Shape.FreeText text, WordNode word) when !node.IsNothing => Text(word.Text, text, key),
             (Shape.TextList or Shape.WordList, ListNode or WordNode) when !node.IsNothing => List(node, key),
             _ => (null, ShapeText.Mismatch(key, node.Kind)),
         };
@@ -65,7 +65,7 @@ internal sealed class ValueReader(ProblemList problems)
             : (null, $"{key.Path} goes {ShapeText.Bounds(quantity, unit, spelling)}, not '{text}'");
     }
 
-    private static (SettingValue? Value, string Wrong) Count(string text, Shape.Count count, KeyNode key)
+    private static (SettingValue? Value, string Wrong) Count(string text, Shape.WholeNumber count, KeyNode key)
     {
         if (UnitText.HasComma(text))
         {
@@ -89,7 +89,7 @@ internal sealed class ValueReader(ProblemList problems)
         _ => (null, ShapeText.Mismatch(key, text.Length == 0 ? "nothing" : $"'{text}'")),
     };
 
-    private static (SettingValue? Value, string Wrong) Text(string text, Shape.Text shape, KeyNode key) =>
+    private static (SettingValue? Value, string Wrong) Text(string text, Shape.FreeText shape, KeyNode key) =>
         string.IsNullOrWhiteSpace(text) || shape.Holding.Any(h => !text.Contains(h, StringComparison.Ordinal))
             ? (null, ShapeText.Mismatch(key, $"'{text}'"))
             : (new() { Word = text }, "");

@@ -14,7 +14,7 @@ public sealed record KeyFigures(int Count, double? LargestErrorDeg, double? RmsE
             ? new KeyFigures(0, null, null)
             : new KeyFigures(
                 with.Sum(k => k.Frames.Length),
-                Degrees.Of(with.Max(k => k.LargestErrorRadians)),
-                Degrees.Of(Math.Sqrt(with.Average(k => k.RmsErrorRadians * k.RmsErrorRadians))));
+                ReportDegrees.Of(with.Max(k => k.LargestErrorRadians)),
+                ReportDegrees.Of(Math.Sqrt(with.Average(k => k.RmsErrorRadians * k.RmsErrorRadians))));
     }
 }

@@ -32,9 +32,9 @@ public sealed record SampleCounts
         Identical = diff.Joints.Sum(j => (long)j.Identical),
         Rewritten = diff.Joints.Sum(j => (long)j.Rewritten),
         Smoothed = diff.Joints.Sum(j => (long)j.Smoothed),
-        LargestSmoothingDeg = Degrees.Of(diff.Joints.Max(j => j.Smoothing.Largest)),
+        LargestSmoothingDeg = ReportDegrees.Of(diff.Joints.Max(j => j.Smoothing.Largest)),
         Mended = diff.Joints.Sum(j => (long)j.Mended),
-        LargestMendDeg = Degrees.Of(diff.Joints.Max(j => j.Mends.Largest)),
+        LargestMendDeg = ReportDegrees.Of(diff.Joints.Max(j => j.Mends.Largest)),
         Missing = diff.Joints.Sum(j => (long)j.Missing),
     };
 }

@@ -3,7 +3,7 @@ namespace MocapClean.Core.Takes;
 /// <summary>An SMPTE ST 12-1 address: the number of a frame since midnight, written as hours, minutes, seconds and frames.</summary>
 public sealed record TimeCode
 {
-    private const string Shape = "an address is two digits each of hours, minutes, seconds and frames";
+    private const string Form = "an address is two digits each of hours, minutes, seconds and frames";
 
     /// <summary>The address of a frame counted from midnight; whole days fall away.</summary>
     public TimeCode(TimeCodeRate rate, long frame)
@@ -91,14 +91,14 @@ public sealed record TimeCode
     {
         if (text.Length != 11 || !IsTwo(text, 0) || !IsTwo(text, 3) || !IsTwo(text, 6) || !IsTwo(text, 9) || text[2] != ':' || text[5] != ':')
         {
-            return $"'{text}' is no time code: {Shape}, as 01:00:00{Mark(rate)}00";
+            return $"'{text}' is no time code: {Form}, as 01:00:00{Mark(rate)}00";
         }
 
         if (text[8] != Mark(rate))
         {
             return text[8] is ':' or ';'
                 ? $"'{text}' is {(rate.DropFrame ? "not " : "")}a drop-frame address, but the rate is {rate.Name}"
-                : $"'{text}' is no time code: {Shape}, as 01:00:00{Mark(rate)}00";
+                : $"'{text}' is no time code: {Form}, as 01:00:00{Mark(rate)}00";
         }
 
         if (Two(text, 0) > 23 || Two(text, 3) > 59 || Two(text, 6) > 59 || Two(text, 9) >= rate.Nominal)

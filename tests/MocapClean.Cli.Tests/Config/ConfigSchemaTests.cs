@@ -21,7 +21,7 @@ public sealed class ConfigSchemaTests
         var key = Leaves().First(k => k.Path == path);
         AssertBoth(key, Good(key.Setting!), isGood: true);
         AssertBoth(key, Bad(key.Setting!), isGood: false);
-        AssertBoth(key, key.Setting!.Shape is Shape.Text or Shape.TextList or Shape.WordList ? "{a: 1}" : "[{a: 1}]", isGood: false);
+        AssertBoth(key, key.Setting!.Shape is Shape.FreeText or Shape.TextList or Shape.WordList ? "{a: 1}" : "[{a: 1}]", isGood: false);
     }
 
     [Theory]
@@ -84,7 +84,7 @@ public sealed class ConfigSchemaTests
         Shape.Choice => "surely-not",
         Shape.Quantity { Unit: Unit.Hertz } => "6 deg",
         Shape.Quantity => "6 Hz",
-        Shape.Count => "1.5",
+        Shape.WholeNumber => "1.5",
         Shape.Flag => "1",
         Shape.TextList { Length: not null } => "[a, b]",
         Shape.WordList => "[]",

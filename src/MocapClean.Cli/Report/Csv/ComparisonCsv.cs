@@ -16,10 +16,10 @@ public static class ComparisonCsv
             csv.WriteField(j.Name);
             csv.WriteField(j.Compared, []);
             csv.WriteField(j.Changed, []);
-            csv.WriteNumber(Degrees.Of(j.Change.Largest));
+            csv.WriteNumber(ReportDegrees.Of(j.Change.Largest));
             csv.WriteField(j.LargestAt, []);
-            csv.WriteNumber(Degrees.Of(j.Change.Rms));
-            csv.WriteNumber(Degrees.Of(j.Change.Percentile95));
+            csv.WriteNumber(ReportDegrees.Of(j.Change.Rms));
+            csv.WriteNumber(ReportDegrees.Of(j.Change.Percentile95));
             csv.WriteField(j.MissingBefore, []);
             csv.WriteField(j.MissingAfter, []);
             csv.EndRecord();

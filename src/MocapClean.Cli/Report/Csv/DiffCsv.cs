@@ -22,8 +22,8 @@ public static class DiffCsv
             csv.WriteField(report.Labels.Number(f.Last), []);
             csv.WriteField(f.Kind.Text());
             csv.WriteField(f.Action.Text());
-            csv.WriteNumber(Degrees.Of(row.LargestRadians));
-            csv.WriteNumber(Degrees.Of(f.ExpectedErrorRadians));
+            csv.WriteNumber(ReportDegrees.Of(row.LargestRadians));
+            csv.WriteNumber(ReportDegrees.Of(f.ExpectedErrorRadians));
             csv.WriteNumber(f.Spreads is { } s ? Math.Round(s, 2) : null);
             csv.WriteField(report.Labels.TimeCode(f.First));
             csv.WriteField(report.Labels.TimeCode(f.Last));

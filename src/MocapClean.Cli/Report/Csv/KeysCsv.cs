@@ -1,5 +1,6 @@
 using System.Collections.Immutable;
 using CsvHelper;
+using MocapClean.Cli.Formats.Csv;
 using MocapClean.Core.Orientation;
 using MocapClean.Core.Stages;
 using MocapClean.Core.Stages.Reduce;
@@ -46,9 +47,10 @@ public static class KeysCsv
 
     private static void WriteComponents(CsvWriter csv, Quat q)
     {
+        Span<byte> text = stackalloc byte[FixedDecimals.Longest];
         foreach (var component in (ReadOnlySpan<double>)[q.W, q.X, q.Y, q.Z])
         {
-            csv.WriteField(component, "F14");
+            csv.WriteField(text[..FixedDecimals.Write(component, text, (byte)'.')]);
         }
     }
 

@@ -6,10 +6,10 @@ using MocapClean.Core.Takes;
 namespace MocapClean.Cli.Report.Json;
 
 /// <summary>The diff report of a take as JSON: the rows of the table, with what a table has no room for.</summary>
-public sealed record DiffDocument(TakeSummary Summary, ImmutableArray<DiffDocument.Row> Rows)
+public sealed record DiffDocument(TakeSummary Summary, ImmutableArray<DiffDocument.FindingRow> Rows)
 {
     /// <summary>One finding.</summary>
-    public sealed record Row
+    public sealed record FindingRow
     {
         /// <summary>The joint; empty for the whole take.</summary>
         public required string Joint { get; init; }
@@ -54,15 +54,15 @@ public sealed record DiffDocument(TakeSummary Summary, ImmutableArray<DiffDocume
     /// <summary>Writes the document to a stream that stays open.</summary>
     public static void Write(TakeReport report, TakeSummary summary, Stream output)
     {
-        var rows = report.Diff.Rows.Select(r => new Row
+        var rows = report.Diff.Rows.Select(r => new FindingRow
         {
             Joint = report.JointName(r.Finding),
             FirstFrame = report.Labels.Number(r.Finding.First),
             LastFrame = report.Labels.Number(r.Finding.Last),
             Kind = r.Finding.Kind.Text(),
             Action = r.Finding.Action.Text(),
-            LargestDeg = Degrees.Of(r.LargestRadians),
-            ExpectedErrorDeg = Degrees.Of(r.Finding.ExpectedErrorRadians),
+            LargestDeg = ReportDegrees.Of(r.LargestRadians),
+            ExpectedErrorDeg = ReportDegrees.Of(r.Finding.ExpectedErrorRadians),
             Spreads = r.Finding.Spreads is { } s ? Math.Round(s, 2) : null,
             FirstTimecode = report.Labels.TimeCode(r.Finding.First),
             LastTimecode = report.Labels.TimeCode(r.Finding.Last),

@@ -17,7 +17,7 @@ public sealed class IngestStage : IStage
             var (unit, rows) = UnitLength.Project(track, joint, context.PerJoint[joint].Ingest.OffUnit);
             return new JointResult(unit, [.. findings, .. rows]);
         });
-        return RestPose.SetApart(EndSegments(lengths, ClockFaults.Find(take.Clock)), context);
+        return RestPoseSearch.SetApart(EndSegments(lengths, ClockFaults.Find(take.Clock)), context);
     }
 
     private static Take EndSegments(Take take, ImmutableArray<Finding> faults)

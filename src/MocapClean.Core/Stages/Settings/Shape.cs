@@ -18,13 +18,13 @@ public abstract record Shape
     public sealed record Quantity(Unit Unit, double Low, double High, ImmutableArray<string> OrWords) : Shape;
 
     /// <summary>A whole number without unit.</summary>
-    public sealed record Count(int Low, int High) : Shape;
+    public sealed record WholeNumber(int Low, int High) : Shape;
 
     /// <summary>True or false.</summary>
     public sealed record Flag : Shape;
 
     /// <summary>Any text that is not empty, holding each of these parts.</summary>
-    public sealed record Text(params ImmutableArray<string> Holding) : Shape;
+    public sealed record FreeText(params ImmutableArray<string> Holding) : Shape;
 
     /// <summary>A list of texts; a single text counts as a list of one. Of a fixed length and without repeats where one is given, else of any.</summary>
     public sealed record TextList(int? Length = null) : Shape;

@@ -59,7 +59,7 @@ public sealed record SmoothSettings
             (s, v) => s with { CutoffHertz = v.Number }) { OnlyFor = ["butterworth"] },
         new("window", Shape.Of(Unit.FramesOrTime, 0.001, 100000), "100 ms",
             "length of the polynomial's window, made odd", (s, v) => s with { Window = v.Extent }) { OnlyFor = ["savitzky-golay"] },
-        new("order", new Shape.Count(0, 7), "3", "degree of the polynomial", (s, v) => s with { Order = v.Whole }) { OnlyFor = ["savitzky-golay"] },
+        new("order", new Shape.WholeNumber(0, 7), "3", "degree of the polynomial", (s, v) => s with { Order = v.Whole }) { OnlyFor = ["savitzky-golay"] },
         new("largest", Shape.Of(Unit.Degrees, 0.001, 180, "off"), "off", "largest turn by which any sample may be moved",
             (s, v) => s with { LargestRadians = v.IsWord ? double.PositiveInfinity : v.Radians }),
     ]);

@@ -7,7 +7,7 @@ namespace MocapClean.Core.Stages.Ingest;
 /// Recognises a posed first frame that was put in front of the motion: most joints that move at all step between frames 0 and 1, far
 /// beyond what they do in the frames after. Such a frame is kept as delivered and belongs to no segment.
 /// </summary>
-internal static class RestPose
+internal static class RestPoseSearch
 {
     /// <summary>A step below this is within what a joint may do at the start of a motion.</summary>
     private static readonly double SmallestStep = Angle.FromDegrees(2);

@@ -9,7 +9,7 @@ namespace MocapClean.Cli.Batch;
 /// <summary>One pass over a session: the chosen takes are processed, then the reports of the whole session are written.</summary>
 /// <param name="output">Where outputs go.</param>
 /// <param name="journal">What was finished; null for a dry run.</param>
-public sealed class Session(IOutput output, Journal? journal)
+public sealed class SessionPass(IOutput output, Journal? journal)
 {
     /// <summary>Runs a pass.</summary>
     /// <param name="plan">The session.</param>
