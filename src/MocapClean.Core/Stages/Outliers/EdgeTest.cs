@@ -14,13 +14,13 @@ internal readonly record struct EdgeMeasure(Measure Room, Quat RoomTurn, Measure
 }
 
 /// <summary>
-/// The test of an edge: does the motion before and after it predict the increment across it? A cubic with a free jump. A turn on the left
+/// The test of an edge: does the motion before and after it predict the increment across it? A polynomial with a free jump. A turn on the left
 /// does not change increments seen in the joint's frame, a turn on the right none seen in the room, so each telling has its own charts,
 /// one around the nearest neighbour on each side, in which the jump itself does not appear.
 /// </summary>
 internal sealed class EdgeTest
 {
-    private NeighbourFit? regular;
+    private readonly Dictionary<Pattern, NeighbourFit> regular = [];
 
     /// <summary>Tests the edge before a sample; null where too little is seen to tell.</summary>
     public EdgeMeasure? At(MotionPath path, int edge, Pattern most) => Across(path, edge, edge - 1, most);
@@ -28,7 +28,7 @@ internal sealed class EdgeTest
     /// <summary>Tests the samples on both sides of a run as if it were not there.</summary>
     public EdgeMeasure? Across(MotionPath path, int first, int last, Pattern most)
     {
-        var neighbours = Neighbours.Of(path, first, last, most, stackalloc int[2 * Pattern.Side]);
+        var neighbours = Neighbours.Of(path, first, last, most, stackalloc int[2 * Pattern.Most]);
         if (!neighbours.Suffice)
         {
             return null;
@@ -58,14 +58,29 @@ internal sealed class EdgeTest
             new Measure(pattern, Chart.Log(jointTurn).Norm, fit.Misfit(room)), jointTurn);
     }
 
-    private NeighbourFit Fit(Neighbours neighbours) =>
-        neighbours.AreRegular && neighbours.Pattern.Run == 0 ? regular ??= Solve(neighbours) : Solve(neighbours);
+    private NeighbourFit Fit(Neighbours neighbours)
+    {
+        if (!neighbours.AreRegular)
+        {
+            return Solve(neighbours);
+        }
+
+        var pattern = neighbours.Pattern;
+        if (!regular.TryGetValue(pattern, out var fit))
+        {
+            regular[pattern] = fit = Solve(neighbours);
+        }
+
+        return fit;
+    }
 
     private static NeighbourFit Solve(Neighbours neighbours)
     {
         Span<double> times = stackalloc double[neighbours.Count];
         neighbours.Times(times);
         var (before, after) = (neighbours.Before.Length, neighbours.After.Length);
-        return NeighbourFit.WithJump(times, before, Math.Min(3, Math.Min(before, after)));
+        // Where neighbours are short, no more than they can tell on the poorer side, and one value to spare.
+        var degree = Math.Min(neighbours.Pattern.Degree, Math.Min(before + after - 3, (2 * Math.Min(before, after)) - 1));
+        return NeighbourFit.WithJump(times, before, degree);
     }
 }

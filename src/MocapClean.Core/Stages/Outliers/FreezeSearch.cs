@@ -4,7 +4,7 @@ namespace MocapClean.Core.Stages.Outliers;
 
 /// <summary>
 /// Finds runs that repeat one sample to the last digit while the joint should move. It should move when the motion into the run and out
-/// of it both say so, and when it is found elsewhere at the end of the run: a joint that comes to rest slows down first and goes on from
+/// of it both say so, and when it is found elsewhere at one end of the run: a joint that comes to rest slows down first and goes on from
 /// where it rested.
 /// </summary>
 /// <param name="path">The series; frozen runs lose their trust.</param>
@@ -16,50 +16,50 @@ internal sealed class FreezeSearch(MotionPath path, int shortest, double noise)
     private const double Roundings = 5;
     private const double Spreads = 3;
 
-    /// <summary>Seconds over which speed is taken, and the fewest samples.</summary>
-    private const double SpeedSeconds = 0.03;
+    /// <summary>Increments over which speed is taken: few, since it is the speed at the edge that counts.</summary>
     private const int SpeedSamples = 4;
 
-    /// <summary>All freezes, in order: the repeats, not the sample that they repeat, and the turn from edge to edge.</summary>
+    /// <summary>All freezes, in order: the samples to doubt and the jump that tells.</summary>
     public List<(int First, int Last, double Turn)> Run()
     {
         var found = new List<(int, int, double)>();
-        for (var n = 1; n < path.Length; n++)
+        for (var n = 0; n < path.Length; n++)
         {
-            var last = n - 1;
-            while (last + 1 < path.Length && path.IsWhole(last, last + 1)
-                && SlowUpdate.IsRepeat(path.Samples[last], path.Samples[last + 1]))
+            var last = n;
+            while (path.IsWhole(last, last + 1) && SlowUpdate.IsRepeat(path.Samples[last], path.Samples[last + 1]))
             {
                 last++;
             }
 
-            if (last - n + 1 >= shortest && Turn(n, last) is var turn && turn > 0)
+            if (last - n >= shortest && Frozen(n, last) is var (first, end, turn))
             {
-                path.Trusted.AsSpan(n, last - n + 1).Clear();
-                found.Add((n, last, turn));
+                path.Trusted.AsSpan(first, end - first + 1).Clear();
+                found.Add((first, end, turn));
             }
 
-            n = Math.Max(n, last);
+            n = last;
         }
 
         return found;
     }
 
-    private double Turn(int first, int last)
+    /// <summary>
+    /// Which samples of a run of equal ones are frozen: all but the first where the jump comes after them, as a sensor that holds its last
+    /// value does; all but the last where it comes before them. Null where it is no freeze.
+    /// </summary>
+    private (int First, int Last, double Turn)? Frozen(int first, int last)
     {
-        if (last + 1 >= path.Length || !path.IsWhole(last, last + 1))
-        {
-            return 0;
-        }
+        var held = CaughtUp(last, Speed(first, -1), Speed(last + 1, 1), last - first);
+        var foretold = CaughtUp(first - 1, Speed(first - 1, -1), Speed(last, 1), last - first);
+        return held == 0 && foretold == 0 ? null : held >= foretold ? (first + 1, last, held) : (first, last - 1, foretold);
+    }
 
+    /// <summary>The jump after a sample where motion on both sides says that the samples should move; 0 otherwise.</summary>
+    private double CaughtUp(int n, double before, double after, int count)
+    {
         var least = Math.Max(Roundings * path.Rounding, Spreads * noise);
-        var count = last - first + 1;
-        var before = Speed(first - 1, -1);
-        var after = Speed(last + 1, 1);
-        // Against the jump back to the motion, one increment of it is no evidence.
-        var turn = Chart.Log(path.Samples[last].Conjugate * path.Samples[last + 1]).Norm;
-        var caughtUp = turn - Math.Max(before, after);
-        return before * count > least && after * count > least && caughtUp > least ? turn : 0;
+        var turn = path.IsWhole(n, n + 1) ? Angle.Between(path.Samples[n], path.Samples[n + 1]) : 0;
+        return Math.Min(before, after) * count > least && turn - Math.Max(before, after) > least ? turn : 0;
     }
 
     /// <summary>
@@ -67,17 +67,31 @@ internal sealed class FreezeSearch(MotionPath path, int shortest, double noise)
     /// </summary>
     private double Speed(int from, int direction)
     {
-        var span = Math.Max(SpeedSamples, (int)Math.Round(SpeedSeconds * path.Rate));
-        var (near, far) = (from + (direction * span), from + (2 * direction * span));
-        if (!path.IsWhole(Math.Min(from, near), Math.Max(from, near)))
+        var near = from + (direction * SpeedSamples);
+        if (Pace(from, near) is not { } speed)
         {
             return 0;
         }
 
-        var speed = Angle.Between(path.Samples[from], path.Samples[near]) / span;
-        var earlier = path.IsWhole(Math.Min(near, far), Math.Max(near, far))
-            ? Angle.Between(path.Samples[near], path.Samples[far]) / span
-            : speed;
+        var earlier = Pace(near, near + (direction * SpeedSamples)) ?? speed;
         return Math.Max(0, speed - Math.Max(0, (earlier - speed) / 2));
+    }
+
+    /// <summary>Mean length of the increments between two samples; null where they are not all there.</summary>
+    private double? Pace(int from, int to)
+    {
+        var (first, last) = (Math.Min(from, to), Math.Max(from, to));
+        if (!path.IsWhole(first, last))
+        {
+            return null;
+        }
+
+        var sum = 0.0;
+        for (var n = first; n < last; n++)
+        {
+            sum += Angle.Between(path.Samples[n], path.Samples[n + 1]);
+        }
+
+        return sum / (last - first);
     }
 }

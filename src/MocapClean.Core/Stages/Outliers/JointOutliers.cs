@@ -13,6 +13,12 @@ internal static class JointOutliers
     /// <summary>A turn between neighbours beyond which not even its axis is sure, radians: 170 degrees.</summary>
     private const double WidestTurn = 2.967;
 
+    /// <summary>
+    /// The smallest turn that is told as a step or an offset, radians: 1 degree. Sensors settle anew by some tenths of a degree as markers
+    /// come and go or fields change; that is their accuracy, not a fault, and nobody need look at it.
+    /// </summary>
+    private const double SmallestTurn = Math.PI / 180;
+
     /// <summary>Searches one track.</summary>
     /// <param name="take">The take that it belongs to.</param>
     /// <param name="joint">Index of the track.</param>
@@ -62,13 +68,13 @@ internal static class JointOutliers
             {
                 marks.Reject(first, last, FaultKind.Spike, offset.In.Size, offset.In.Spreads);
             }
-            else
+            else if (Math.Max(offset.In.Size, offset.Out.Size) >= SmallestTurn)
             {
                 marks.Offset(first, last, offset, settings.Fill.Worst);
             }
         }
 
-        foreach (var step in steps)
+        foreach (var step in steps.Where(s => s.Size >= SmallestTurn))
         {
             marks.Step(rhythm.FrameOf(step.First), step);
         }

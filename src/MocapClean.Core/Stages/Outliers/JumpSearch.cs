@@ -14,28 +14,38 @@ internal sealed class JumpSearch(MotionPath path, double threshold, int longestS
     private const int Together = 8;
 
     /// <summary>
-    /// A path counts as whole when its misfit is within this many spreads: healthy motion exceeds it about as rarely as six spreads of
-    /// size, since the misfit sums more values.
+    /// A path counts as whole when its misfit is within this many spreads: that healthy motion exceeds it is about as rare as six spreads
+    /// of size, since the misfit sums more values.
     /// </summary>
     private const double Whole = 4;
 
     /// <summary>Or within this part of the jump that was explained away: near another fault nothing fits better.</summary>
-    private const double WholeBeside = 0.1;
-
-    /// <summary>What a sample given up must save in squared spreads of misfit: its three numbers.</summary>
-    private const double PriceOfSample = 3;
+    private const double WholeBeside = 0.02;
 
     /// <summary>
-    /// The smallest turn that is called a step, radians: 1 degree. Sensors settle anew by some tenths of a degree as markers come and go
-    /// or fields change; that is their accuracy, not a fault, and nobody need look at it.
+    /// What a sample given up must save in squared spreads of misfit. A path that is whole has less than one of them in nearly every place,
+    /// so a sample that is not needed is never given up, and one that is needed always.
     /// </summary>
-    private const double SmallestStep = Math.PI / 180;
+    private const double PriceOfSample = 1;
 
-    private static readonly Pattern Full = new(Pattern.Side, 0, Pattern.Side);
+    /// <summary>
+    /// What is within so many spreads of where the motion on one side leads is motion, and so is what is within this part of its pace; at
+    /// the instant of a blow, within this part of the size, which is less than what even the softest spike of eight samples has at its
+    /// ends, sin(pi / 9).
+    /// </summary>
+    private const double MotionSpreads = 5;
+    private const double MotionPart = 0.25;
+
+    /// <summary>Samples between two spikes that could as well belong to them.</summary>
+    private const int Unvouched = 2;
+
+    /// <summary>Samples of the run that decides how runs are best looked at.</summary>
+    private const int TypicalRun = 2;
 
     private readonly Screen screen = new(path, threshold, topTurn);
     private readonly RunTest runs = new();
     private readonly EdgeTest edges = new();
+    private readonly MotionTest motion = new(path);
 
     /// <summary>Robust spread of the length of one sample's noise, radians.</summary>
     public double Noise => screen.Noise;
@@ -50,7 +60,31 @@ internal sealed class JumpSearch(MotionPath path, double threshold, int longestS
         }
 
         stories.Sort((a, b) => a.First.CompareTo(b.First));
-        return stories;
+        return Joined(stories);
+    }
+
+    /// <summary>
+    /// Makes one of spikes so close that the samples between them have no neighbours to vouch for them, where the whole is no longer than a
+    /// spike may be.
+    /// </summary>
+    private List<Story> Joined(List<Story> stories)
+    {
+        var found = new List<Story>();
+        foreach (var story in stories)
+        {
+            if (story is Story.Spike next && found.Count > 0 && found[^1] is Story.Spike last
+                && next.First - last.Last <= Unvouched + 1 && next.Last - last.First < longestSpike)
+            {
+                var larger = next.Size > last.Size ? next : last;
+                found[^1] = larger with { First = last.First, Last = next.Last };
+            }
+            else
+            {
+                found.Add(story);
+            }
+        }
+
+        return found;
     }
 
     private void Explain((int First, int Last) place, List<Story> stories)
@@ -58,7 +92,7 @@ internal sealed class JumpSearch(MotionPath path, double threshold, int longestS
         var (first, last) = place;
         while (first >= 0)
         {
-            var spread = new LocalSpread(path, runs, edges, (first, last), screen.Noise);
+            var spread = new LocalSpread(path, runs, edges, motion, (first, last), screen.Noise);
             var best = Steps(first, last, spread).Concat<Story>(Spikes(first, last, spread)).MinBy(s => s.Cost);
             if (best is null)
             {
@@ -73,10 +107,16 @@ internal sealed class JumpSearch(MotionPath path, double threshold, int longestS
 
     private IEnumerable<Story.Step> Steps(int first, int last, LocalSpread spread)
     {
+        if (spread.Best(0) is not { } look)
+        {
+            yield break;
+        }
+
         for (var n = first; n <= last + 1 && n < path.Length; n++)
         {
-            if (path.Trusted[n] && edges.At(path, n, Full) is { } edge && edge.Better is var m && m.Size > SmallestStep
-                && spread.OfEdge(m.Pattern) is { } usual && IsFault(m, usual))
+            if (path.Trusted[n] && edges.At(path, n, look) is { } edge && edge.Better is var m
+                && spread.OfEdge(m.Pattern) is { } usual && IsFault(m, usual) 
+                && (m.Pattern.Run == 0 ? motion.Miss(n) > Roughly(m, spread) : IsSure(n, spread)))
             {
                 yield return new Story.Step
                 {
@@ -91,14 +131,37 @@ internal sealed class JumpSearch(MotionPath path, double threshold, int longestS
         }
     }
 
+    /// <summary>
+    /// A jump across a gap is sure when every look sees it, the plainest too: what bends at the edges of a gap must not pass for one.
+    /// </summary>
+    private bool IsSure(int edge, LocalSpread spread)
+    {
+        foreach (var look in Pattern.AllLooks)
+        {
+            if (edges.At(path, edge, look) is not { } seen || spread.OfEdge(seen.Better.Pattern) is not { } usual
+                || seen.Better.Size < threshold * usual.Size)
+            {
+                return false;
+            }
+        }
+
+        return true;
+    }
+
     private IEnumerable<Story.Spike> Spikes(int first, int last, LocalSpread spread)
     {
+        if (spread.Best(TypicalRun) is not { } look)
+        {
+            yield break;
+        }
+
         for (var count = 1; count <= longestSpike; count++)
         {
             for (var n = first; n + count - 1 <= last; n++)
             {
-                if (path.Trusted[n] && path.Trusted[n + count - 1] && runs.At(path, n, n + count - 1, Full) is { } m
-                    && spread.OfRun(m.Pattern) is { } usual && IsFault(m, usual))
+                if (path.Trusted[n] && path.Trusted[n + count - 1] && runs.At(path, n, n + count - 1, look) is { } m
+                    && spread.OfRun(m.Pattern) is { } usual && IsFault(m, usual)
+                    && !motion.Explains(n, n + count - 1, Near(n, count, m, spread), Roughly(m, spread)))
                 {
                     yield return new Story.Spike
                     {
@@ -112,6 +175,11 @@ internal sealed class JumpSearch(MotionPath path, double threshold, int longestS
             }
         }
     }
+
+    private double Near(int first, int count, Measure m, LocalSpread spread) => Math.Max(
+        MotionSpreads * spread.OfMotion, MotionPart * Math.Min(m.Size, motion.Pace(first, first + count - 1)));
+
+    private static double Roughly(Measure m, LocalSpread spread) => Math.Max(MotionSpreads * spread.OfMotion, MotionPart * m.Size);
 
     private bool IsFault(Measure m, Measure usual) =>
         m.Size > threshold * usual.Size && m.Misfit < Math.Max(Whole * usual.Misfit, WholeBeside * m.Size);

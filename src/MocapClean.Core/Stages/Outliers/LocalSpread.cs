@@ -7,19 +7,22 @@ namespace MocapClean.Core.Stages.Outliers;
 /// <param name="path">The series.</param>
 /// <param name="runs">The test of runs.</param>
 /// <param name="edges">The test of edges.</param>
+/// <param name="motion">The test of motion.</param>
 /// <param name="place">The samples that are in doubt and are not asked.</param>
 /// <param name="noise">Floor: the spread of one sample's noise, radians.</param>
-internal sealed class LocalSpread(MotionPath path, RunTest runs, EdgeTest edges, (int First, int Last) place, double noise)
+internal sealed class LocalSpread(
+    MotionPath path, RunTest runs, EdgeTest edges, MotionTest motion, (int First, int Last) place, double noise)
 {
     /// <summary>Seconds on either side that are the neighbourhood.</summary>
     private const double Seconds = 0.4;
 
     /// <summary>Tests on either side: enough for a median.</summary>
-    private const int Wanted = 24;
+    private const int Wanted = 20;
     private const int Fewest = 8;
 
     private readonly Dictionary<Pattern, Measure?> ofRuns = [];
     private readonly Dictionary<Pattern, Measure?> ofEdges = [];
+    private readonly Dictionary<Pattern, Measure?> ofMotion = [];
 
     /// <summary>Spreads of size and misfit of healthy runs seen with the same neighbours; null where nothing healthy is near.</summary>
     public Measure? OfRun(Pattern pattern) => Once(ofRuns, pattern, first => runs.At(path, first, first + pattern.Run - 1, pattern));
@@ -27,6 +30,31 @@ internal sealed class LocalSpread(MotionPath path, RunTest runs, EdgeTest edges,
     /// <summary>Spreads of size and misfit of healthy edges.</summary>
     public Measure? OfEdge(Pattern pattern) => Once(
         ofEdges, pattern, first => edges.Across(path, first, first + pattern.Run - 1, pattern)?.Room);
+
+    /// <summary>Spread of the distance of healthy samples from where the motion on one side leads, radians.</summary>
+    public double OfMotion => Math.Max(
+        noise,
+        Once(ofMotion, new Pattern(4, 1, 4, 2), n => motion.OneSided(n, -1) is var miss && double.IsFinite(miss) ? new Measure(default, miss, 0) : null)?.Size ?? 0);
+
+    /// <summary>
+    /// The look at runs, or at edges, that predicts healthy motion best here: more neighbours where noise is all there is, a more bent path
+    /// where the motion is fast. Null where nothing healthy is near.
+    /// </summary>
+    /// <param name="run">Samples of the run that decides; 0 for edges.</param>
+    public Pattern? Best(int run)
+    {
+        var (best, least) = ((Pattern?)null, double.PositiveInfinity);
+        foreach (var pattern in Pattern.Looks)
+        {
+            var look = pattern with { Run = run };
+            if ((run == 0 ? OfEdge(look) : OfRun(look)) is { } usual && usual.Size < least)
+            {
+                (best, least) = (pattern, usual.Size);
+            }
+        }
+
+        return best;
+    }
 
     private Measure? Once(Dictionary<Pattern, Measure?> known, Pattern pattern, Func<int, Measure?> test)
     {
@@ -49,8 +77,9 @@ internal sealed class LocalSpread(MotionPath path, RunTest runs, EdgeTest edges,
 
         var size = Math.Max(before?.Size ?? 0, after?.Size ?? 0);
         var misfit = Math.Max(before?.Misfit ?? 0, after?.Misfit ?? 0);
-        // White noise leaves its own size times the root of the free values over; a prediction from few neighbours about doubles it.
-        return new Measure(pattern, Math.Max(size, 2 * noise), Math.Max(misfit, noise * Math.Sqrt(pattern.Before + pattern.After - 4)));
+        // White noise leaves its own size times the root of the free values over.
+        var free = Math.Max(1, pattern.Before + pattern.After - pattern.Degree - 1);
+        return new Measure(pattern, Math.Max(size, noise), Math.Max(misfit, noise * Math.Sqrt(free)));
     }
 
     private Measure? OneSide(Pattern pattern, int from, int direction, Func<int, Measure?> test)

@@ -10,16 +10,16 @@ internal readonly record struct Measure(Pattern Pattern, double Size, double Mis
 
 /// <summary>
 /// The test of a run: are its samples where a smooth path through the neighbours on both sides would have them, and is that path whole?
-/// A cubic in a chart around the middle of the two nearest neighbours.
+/// A polynomial in a chart around the middle of the two nearest neighbours.
 /// </summary>
 internal sealed class RunTest
 {
-    private readonly Dictionary<int, NeighbourFit> regular = [];
+    private readonly Dictionary<Pattern, NeighbourFit> regular = [];
 
     /// <summary>Tests the samples from first to last; null where too little is seen to tell.</summary>
     public Measure? At(MotionPath path, int first, int last, Pattern most)
     {
-        var neighbours = Neighbours.Of(path, first, last, most, stackalloc int[2 * Pattern.Side]);
+        var neighbours = Neighbours.Of(path, first, last, most, stackalloc int[2 * Pattern.Most]);
         if (!neighbours.Suffice)
         {
             return null;
@@ -57,10 +57,10 @@ internal sealed class RunTest
             return Solve(neighbours);
         }
 
-        var run = neighbours.Pattern.Run;
-        if (!regular.TryGetValue(run, out var fit))
+        var pattern = neighbours.Pattern;
+        if (!regular.TryGetValue(pattern, out var fit))
         {
-            regular[run] = fit = Solve(neighbours);
+            regular[pattern] = fit = Solve(neighbours);
         }
 
         return fit;
@@ -77,6 +77,8 @@ internal sealed class RunTest
             wanted[n] = n - ((run - 1) / 2.0);
         }
 
-        return NeighbourFit.Across(times, times.Length > Pattern.Fewest ? 3 : 2, wanted);
+        // Where neighbours are short, with two values to spare.
+        var degree = Math.Min(neighbours.Pattern.Degree, times.Length - 3);
+        return NeighbourFit.Across(times, degree, wanted);
     }
 }

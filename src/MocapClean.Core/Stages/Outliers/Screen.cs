@@ -13,14 +13,17 @@ internal sealed class Screen
     /// <summary>
     /// Share of the threshold at which a closer look begins: the largest innovation around a fault is at least this part of the fault.
     /// </summary>
-    private const double Sensitivity = 0.6;
+    private const double Sensitivity = 0.7;
 
     /// <summary>Seconds, and at least frames, over which the local spread is taken: more than twice the longest spike with its reach.</summary>
     private const double BlockSeconds = 0.45;
     private const int ShortestBlock = 48;
 
-    /// <summary>The noise of the finest motion-capture sensors, radians: 0.02 degrees. Nothing is judged in finer units.</summary>
-    private const double FinestNoise = 3.5e-4;
+    /// <summary>
+    /// The noise of the finest motion-capture sensors, 0.025 degrees an axis, as the robust spread of its length, radians: about 2.3 times
+    /// that. Nothing is judged in finer units.
+    /// </summary>
+    private const double FinestNoise = 1e-3;
 
     private readonly MotionPath path;
     private readonly double[][] innovations;
