@@ -5,13 +5,10 @@ namespace MocapClean.Core.Stages.Outliers;
 /// counts, so that neither the end of a rest nor a blow is a fault.
 /// </summary>
 /// <param name="path">The series.</param>
-/// <param name="runs">The test of runs.</param>
-/// <param name="edges">The test of edges.</param>
-/// <param name="motion">The test of motion.</param>
+/// <param name="tests">The tests.</param>
 /// <param name="place">The samples that are in doubt and are not asked.</param>
 /// <param name="noise">Floor: the spread of one sample's noise, radians.</param>
-internal sealed class LocalSpread(
-    MotionPath path, RunTest runs, EdgeTest edges, MotionTest motion, (int First, int Last) place, double noise)
+internal sealed class LocalSpread(MotionPath path, Tests tests, (int First, int Last) place, double noise)
 {
     /// <summary>Seconds on either side that are the neighbourhood.</summary>
     private const double Seconds = 0.4;
@@ -25,16 +22,16 @@ internal sealed class LocalSpread(
     private readonly Dictionary<Pattern, Measure?> ofMotion = [];
 
     /// <summary>Spreads of size and misfit of healthy runs seen with the same neighbours; null where nothing healthy is near.</summary>
-    public Measure? OfRun(Pattern pattern) => Once(ofRuns, pattern, first => runs.At(path, first, first + pattern.Run - 1, pattern));
+    public Measure? OfRun(Pattern pattern) => Once(ofRuns, pattern, first => tests.Runs.At(path, first, first + pattern.Run - 1, pattern));
 
     /// <summary>Spreads of size and misfit of healthy edges.</summary>
     public Measure? OfEdge(Pattern pattern) => Once(
-        ofEdges, pattern, first => edges.Across(path, first, first + pattern.Run - 1, pattern)?.Room);
+        ofEdges, pattern, first => tests.Edges.Across(path, first, first + pattern.Run - 1, pattern)?.Room);
 
     /// <summary>Spread of the distance of healthy samples from where the motion on one side leads, radians.</summary>
     public double OfMotion => Math.Max(
         noise,
-        Once(ofMotion, new Pattern(4, 1, 4, 2), n => motion.OneSided(n, -1) is var miss && double.IsFinite(miss) ? new Measure(default, miss, 0) : null)?.Size ?? 0);
+        Once(ofMotion, new Pattern(4, 1, 4, 2), n => new Measure(default, MotionTest.OneSided(path, n, -1), 0))?.Size ?? 0);
 
     /// <summary>
     /// The look at runs, or at edges, that predicts healthy motion best here: more neighbours where noise is all there is, a more bent path

@@ -7,8 +7,7 @@ namespace MocapClean.Core.Stages.Outliers;
 /// the increments on one side of it lead there: at a steady speed, steadily speeding up or down, or anything between. A blow parts a path
 /// into two, each of which explains its own samples; a fault is explained by neither.
 /// </summary>
-/// <param name="path">The series.</param>
-internal sealed class MotionTest(MotionPath path)
+internal sealed class MotionTest
 {
     /// <summary>How far beyond the carried-on motions a sample may lie, as a part of what they differ by.</summary>
     private const double Leeway = 0.5;
@@ -19,67 +18,104 @@ internal sealed class MotionTest(MotionPath path)
     /// <summary>Increments on one side.</summary>
     private const int Steps = 3;
 
-    /// <summary>
-    /// Whether motion explains a run, parted between the motion before and after it in the best place. The instant of a blow takes
-    /// one or two samples, which need to be roughly where motion leads only.
-    /// </summary>
-    /// <param name="first">First sample of the run.</param>
-    /// <param name="last">Its last.</param>
-    /// <param name="near">How near samples must be to where motion leads, radians.</param>
-    /// <param name="roughly">How near those of the blow itself, radians.</param>
-    public bool Explains(int first, int last, double near, double roughly)
+    private readonly MotionPath path;
+    private readonly int first;
+    private readonly double[] before;
+    private readonly double[] after;
+
+    /// <summary>Looks at a range of samples.</summary>
+    public MotionTest(MotionPath path, int first, int last)
     {
-        int Rough(int n, int side) => OneSided(n, side) is var miss && miss <= near ? 0 : miss <= roughly ? 1 : Instant + 1;
-        Span<int> after = stackalloc int[last - first + 2];
-        for (var n = last; n >= first; n--)
+        this.path = path;
+        this.first = first;
+        before = new double[last - first + 1];
+        after = new double[last - first + 1];
+        for (var n = first; n <= last; n++)
         {
-            after[n - first] = after[n - first + 1] + Rough(n, 1);
+            before[n - first] = OneSided(path, n, -1);
+            after[n - first] = OneSided(path, n, 1);
+        }
+    }
+
+    /// <summary>How far a sample lies from where the motion on one side leads, radians; infinite where too little is there.</summary>
+    /// <param name="path">The series.</param>
+    /// <param name="n">The sample.</param>
+    /// <param name="side">-1 for the samples before it, 1 for those after it.</param>
+    public static double OneSided(MotionPath path, int n, int side)
+    {
+        var far = n + (side * (Steps + 1));
+        if (!path.IsWhole(Math.Min(n, far), Math.Max(n, far)))
+        {
+            return double.PositiveInfinity;
         }
 
-        var (least, before) = (after[0], 0);
-        for (var n = first; n <= last && before <= Instant; n++)
-        {
-            before += Rough(n, -1);
-            least = Math.Min(least, before + after[n - first + 1]);
-        }
-
-        return least <= Instant;
+        var on = Carried.On(path, n, side);
+        var wanted = -Increment(path, n, 0, side);
+        var distance = Math.Min(ToSegment(wanted, on.Steady, on.Even), ToSegment(wanted, on.Even, on.Bent));
+        return Math.Max(0, distance - (Leeway * on.Range));
     }
 
     /// <summary>
     /// How far the increment across an edge lies from what a blow at some moment between its samples would make of it: anything between
     /// where the motion before leads and where the motion after comes from, radians.
     /// </summary>
-    public double Miss(int edge)
+    public static double AcrossEdge(MotionPath path, int edge)
     {
         if (!path.IsWhole(edge - Steps - 1, edge + Steps))
         {
             return double.PositiveInfinity;
         }
 
-        var wanted = Increment(edge, 0, -1);
-        var (before, after) = (Carried.On(this, edge, -1), Carried.On(this, edge - 1, 1));
-        // Seen from the other side the same turn has the opposite vector.
-        after = new Carried(-after.Steady, -after.Even, -after.Bent);
+        var wanted = -Increment(path, edge, 0, -1);
+        var (from, to) = (Carried.On(path, edge, -1), Carried.On(path, edge - 1, 1));
         var least = double.PositiveInfinity;
-        foreach (var from in (ReadOnlySpan<Vec3>)[before.Steady, before.Even, before.Bent])
+        foreach (var start in (ReadOnlySpan<Vec3>)[from.Steady, from.Even, from.Bent])
         {
-            foreach (var to in (ReadOnlySpan<Vec3>)[after.Steady, after.Even, after.Bent])
+            // Seen from the other side the same turn has the opposite vector.
+            foreach (var end in (ReadOnlySpan<Vec3>)[-to.Steady, -to.Even, -to.Bent])
             {
-                least = Math.Min(least, ToSegment(-wanted, from, to));
+                least = Math.Min(least, ToSegment(wanted, start, end));
             }
         }
 
-        return Math.Max(0, least - (Leeway * Math.Max(before.Range, after.Range)));
+        return Math.Max(0, least - (Leeway * Math.Max(from.Range, to.Range)));
+    }
+
+    /// <summary>
+    /// Whether motion explains a run within the range, parted between the motion before and after it in the best place. The instant of a
+    /// blow takes one or two samples, which need to be roughly where motion leads only.
+    /// </summary>
+    /// <param name="start">First sample of the run.</param>
+    /// <param name="end">Its last.</param>
+    /// <param name="near">How near samples must be to where motion leads, radians.</param>
+    /// <param name="roughly">How near those of the blow itself, radians.</param>
+    public bool Explains(int start, int end, double near, double roughly)
+    {
+        int Rough(double miss) => miss <= near ? 0 : miss <= roughly ? 1 : Instant + 1;
+        var (fromAfter, fromBefore) = (0, 0);
+        for (var n = start; n <= end; n++)
+        {
+            fromAfter += Rough(after[n - first]);
+        }
+
+        var least = fromAfter;
+        for (var n = start; n <= end && fromBefore <= Instant; n++)
+        {
+            fromBefore += Rough(before[n - first]);
+            fromAfter -= Rough(after[n - first]);
+            least = Math.Min(least, fromBefore + fromAfter);
+        }
+
+        return least <= Instant;
     }
 
     /// <summary>The largest turn between neighbours just outside a run, radians.</summary>
-    public double Pace(int first, int last)
+    public double Pace(int start, int end)
     {
         var most = 0.0;
-        for (var n = first - Steps; n <= last + Steps; n++)
+        for (var n = start - Steps; n <= end + Steps + 1; n++)
         {
-            if ((n < first || n > last) && path.IsWhole(n - 1, n) && n - 1 != last)
+            if ((n < start || n > end + 1) && path.IsWhole(n - 1, n))
             {
                 most = Math.Max(most, Chart.Log(path.Samples[n - 1].Conjugate * path.Samples[n]).Norm);
             }
@@ -88,38 +124,8 @@ internal sealed class MotionTest(MotionPath path)
         return most;
     }
 
-    /// <summary>How far a sample lies from where the motion on one side leads.</summary>
-    /// <param name="n">The sample.</param>
-    /// <param name="side">-1 for the samples before it, 1 for those after it.</param>
-    public double OneSided(int n, int side)
-    {
-        var far = n + (side * (Steps + 1));
-        if (!path.IsWhole(Math.Min(n, far), Math.Max(n, far)))
-        {
-            return double.PositiveInfinity;
-        }
-
-        var on = Carried.On(this, n, side);
-        var wanted = -Increment(n, 0, side);
-        var distance = Math.Min(ToSegment(wanted, on.Steady, on.Even), ToSegment(wanted, on.Even, on.Bent));
-        return Math.Max(0, distance - (Leeway * on.Range));
-    }
-
-    /// <summary>The increment that leads to a sample if the motion on one side is carried on: steady, evenly changing, or bent.</summary>
-    private readonly record struct Carried(Vec3 Steady, Vec3 Even, Vec3 Bent)
-    {
-        /// <summary>How much it matters which.</summary>
-        public double Range => Math.Max((Even - Steady).Norm, (Bent - Even).Norm);
-
-        public static Carried On(MotionTest test, int n, int side)
-        {
-            var (a, b, c) = (-test.Increment(n, 1, side), -test.Increment(n, 2, side), -test.Increment(n, 3, side));
-            return new(a, (2 * a) - b, (3 * (a - b)) + c);
-        }
-    }
-
     /// <summary>The turn, some samples away on one side, to the sample yet farther away.</summary>
-    private Vec3 Increment(int n, int steps, int side)
+    private static Vec3 Increment(MotionPath path, int n, int steps, int side)
     {
         var from = n + (side * steps);
         return Chart.Log(path.Samples[from].Conjugate * path.Samples[from + side]);
@@ -131,5 +137,18 @@ internal sealed class MotionTest(MotionPath path)
         var length = along.NormSquared;
         var part = length > 0 ? Math.Clamp(Vec3.Dot(point - from, along) / length, 0, 1) : 0;
         return (point - from - (part * along)).Norm;
+    }
+
+    /// <summary>The increment that leads to a sample if the motion on one side is carried on: steady, evenly changing, or bent.</summary>
+    private readonly record struct Carried(Vec3 Steady, Vec3 Even, Vec3 Bent)
+    {
+        /// <summary>How much it matters which.</summary>
+        public double Range => Math.Max((Even - Steady).Norm, (Bent - Even).Norm);
+
+        public static Carried On(MotionPath path, int n, int side)
+        {
+            var (a, b, c) = (-Increment(path, n, 1, side), -Increment(path, n, 2, side), -Increment(path, n, 3, side));
+            return new(a, (2 * a) - b, (3 * (a - b)) + c);
+        }
     }
 }

@@ -19,6 +19,9 @@ internal sealed class Screen
     private const double BlockSeconds = 0.45;
     private const int ShortestBlock = 48;
 
+    /// <summary>Samples of the longest place: where everything is striking, the search must not grow with the square of its length.</summary>
+    private const int LongestPlace = 64;
+
     /// <summary>
     /// The noise of the finest motion-capture sensors, 0.025 degrees an axis, as the robust spread of its length, radians: about 2.3 times
     /// that. Nothing is judged in finer units.
@@ -80,7 +83,7 @@ internal sealed class Screen
                 continue;
             }
 
-            if (found.Count > 0 && n - found[^1].Last <= together)
+            if (found.Count > 0 && n - found[^1].Last <= together && n - found[^1].First < LongestPlace)
             {
                 found[^1] = (found[^1].First, n, Math.Max(strength, found[^1].Strength));
             }

@@ -99,10 +99,10 @@ public sealed class KernelTests
         static Quat Blow(int n) => Motion.Turn(0, 0, 1, n < 20 ? 10 * n : 200 - (4 * (n - 20)));
         Quat[] samples = [.. Enumerable.Range(0, 40).Select(Blow)];
         var (near, roughly) = (1e-9, Angle.FromDegrees(1));
-        Assert.True(new MotionTest(Path(samples)).Explains(18, 22, near, roughly));
-        Assert.Equal(0, new MotionTest(Path(samples)).Miss(21), 1e-9);
+        Assert.True(new MotionTest(Path(samples), 10, 30).Explains(18, 22, near, roughly));
+        Assert.Equal(0, MotionTest.AcrossEdge(Path(samples), 21), 1e-9);
         samples[20] *= Motion.Turn(1, 0, 0, 5);
-        Assert.False(new MotionTest(Path(samples)).Explains(18, 22, near, roughly));
+        Assert.False(new MotionTest(Path(samples), 10, 30).Explains(18, 22, near, roughly));
     }
 
     private static MotionPath Path(Quat[] samples) =>

@@ -1,5 +1,4 @@
 using MocapClean.Core.Orientation;
-using MocapClean.Core.Takes;
 using Xunit;
 
 namespace MocapClean.Core.Tests.Stages.Outliers;
