@@ -203,6 +203,33 @@ public sealed class StoryTests
     }
 
     [Fact]
+    public void A_joint_that_is_missing_throughout_is_one_gap() =>
+        Assert.Equal("gap 0-599", Search.Rows(Search.Run(Rate, [.. Enumerable.Repeat(Quat.Missing, 600)])));
+
+    [Fact]
+    public void A_lone_bad_sample_between_gaps_is_found()
+    {
+        var samples = Healthy();
+        samples.AsSpan(600, 3).Fill(Quat.Missing);
+        samples[603] *= Away;
+        samples.AsSpan(604, 3).Fill(Quat.Missing);
+        Assert.Equal("gap 600-602, spike 603-603, gap 604-606", Search.Rows(Search.Run(Rate, samples)));
+    }
+
+    [Fact]
+    public void Bad_samples_one_after_another_are_all_found()
+    {
+        var samples = Healthy();
+        for (var n = 100; n < 1100; n += 20)
+        {
+            samples[n] = Motion.Turn(n % 11, n % 3, 1, 5 + ((n * 37) % 150)) * samples[n];
+        }
+
+        var expected = Enumerable.Range(5, 50).Select(n => $"spike {20 * n}-{20 * n}");
+        Assert.Equal(string.Join(", ", expected), Search.Rows(Search.Run(Rate, samples)));
+    }
+
+    [Fact]
     public void Bad_samples_beside_a_gap_are_found()
     {
         var samples = Healthy();
