@@ -47,7 +47,7 @@ internal static class InspectCommand
 
         foreach (var like in looks.OfType<TakeLook>().GroupBy(l => l.ReadingLines))
         {
-            Console.Out.WriteLine(SuggestedConfig.For([.. like]));
+            Console.Out.WriteLine(SuggestedConfig.For([.. like]) + "\n");
         }
 
         return failures.Any(f => f is not null) ? ExitCode.TakesFailed : ExitCode.Done;

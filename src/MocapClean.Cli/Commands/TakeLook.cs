@@ -1,5 +1,6 @@
 using MocapClean.Cli.Batch;
 using MocapClean.Cli.Formats.Csv;
+using MocapClean.Core.Kernels;
 using MocapClean.Core.Orientation;
 using MocapClean.Core.Stages;
 using MocapClean.Core.Takes;
@@ -58,7 +59,7 @@ internal sealed record TakeLook
             yield return line;
         }
 
-        foreach (var line in Speeds())
+        foreach (var line in Speeds().Concat(Noises()))
         {
             yield return line;
         }
@@ -89,6 +90,24 @@ internal sealed record TakeLook
         if (still.Count > 0)
         {
             yield return $"  never moves: {string.Join(", ", still)}";
+        }
+    }
+
+    /// <summary>The typical noise, and the joints that are three times noisier: worth a look at the sensor.</summary>
+    private IEnumerable<string> Noises()
+    {
+        var joints = Take.Tracks.Select(t => (t.Name, Noise: Angle.ToDegrees(JitterEstimate.OneAxis(t)))).Where(j => j.Noise > 0).OrderByDescending(j => j.Noise).ToList();
+        if (joints.Count == 0)
+        {
+            yield break;
+        }
+
+        var typical = joints[joints.Count / 2].Noise;
+        yield return $"  noise about {typical:0.0000} deg an axis in the median joint, at most {joints[0].Noise:0.0000} deg: {joints[0].Name}";
+        var noisy = joints.Where(j => j.Noise > 3 * typical).Select(j => j.Name).ToList();
+        if (noisy.Count > 0)
+        {
+            yield return $"  more than three times noisier than the median: {string.Join(", ", noisy.Take(8))}{(noisy.Count > 8 ? $" and {noisy.Count - 8} more" : "")}";
         }
     }
 
