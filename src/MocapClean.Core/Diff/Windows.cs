@@ -40,8 +40,12 @@ internal static class Windows
     {
         var within = bad.Where(f => f.First <= window.Last && f.Last >= window.First).ToList();
         ImmutableArray<string> joints = [.. within.Where(f => f.Joint >= 0).Select(f => f.Joint).Distinct().Order().Select(j => take.Tracks[j].Name)];
-        var words = within.OrderByDescending(f => f.Count + f.Lost).ThenBy(f => f.First).ThenBy(f => f.Joint)
-            .Select(f => (f.Joint < 0 ? "" : take.Tracks[f.Joint].Name + " ") + FindingWords.What(f, take.Clock.Rate)).ToList();
+        // The same frames in most joints are one event of the take, not one finding a joint.
+        var words = within.GroupBy(f => (f.Kind, f.First, f.Last)).SelectMany(g => 2 * g.Count() > take.Tracks.Length && g.Count() > 2
+                ? [(Finding: g.First(), Who: $"{g.Count()} joints ")]
+                : g.Select(f => (Finding: f, Who: f.Joint < 0 ? "" : take.Tracks[f.Joint].Name + " ")))
+            .OrderByDescending(w => w.Finding.Count + w.Finding.Lost).ThenBy(w => w.Finding.First).ThenBy(w => w.Finding.Joint)
+            .Select(w => w.Who + FindingWords.What(w.Finding, take.Clock.Rate)).ToList();
         var reason = string.Join("; ", words.Take(NamedFindings)) + (words.Count > NamedFindings ? $"; and {words.Count - NamedFindings} more" : "");
         return new ReshootWindow(window.First, window.Last, joints, reason, BadFrames.Merge(within, inside).Sum(b => b.Count));
     }

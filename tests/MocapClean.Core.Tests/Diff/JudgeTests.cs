@@ -94,6 +94,18 @@ public sealed class JudgeTests
         Assert.Equal((200, 550), (window.First, window.Last));
     }
 
+    [Fact]
+    public void The_same_frames_in_most_joints_are_one_event()
+    {
+        var tracks = Enumerable.Range(0, 5).Select(j => Some.Track($"joint{j}", Some.Spin(1000, 0.1))).ToArray();
+        var take = Some.Take(100, tracks) with
+        {
+            Findings = [.. Enumerable.Range(0, 4).Select(j => Row(j, 500, 504, FaultKind.Gap, FaultAction.Left)), Row(4, 520, 520, FaultKind.Step, FaultAction.Flagged)],
+        };
+        var window = Assert.Single(Of(take).Windows);
+        Assert.Equal("4 joints missing for 5 frames (0.05 s); joint4 jumps by an unknown angle and stays", window.Reason);
+    }
+
     private static Judgement Of(Take take) => Judge.Of(take, null, Defaults, Matches);
 
     private static bool Matches(string name, ImmutableArray<string> globs) => globs.Contains(name);
