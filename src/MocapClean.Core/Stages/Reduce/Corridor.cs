@@ -5,7 +5,7 @@ namespace MocapClean.Core.Stages.Reduce;
 
 /// <summary>
 /// What is left of all angular velocities once each frame has put its ball in: bounds of the intersection along seven directions (three
-/// axes, four diagonals of the cube; the eighth lane repeats the first), and a box that lies inside every sufficient ball.
+/// axes, four diagonals of the cube; the eighth lane repeats the first), and bounds that keep a velocity inside every sufficient ball.
 /// </summary>
 internal struct Corridor
 {
@@ -15,17 +15,17 @@ internal struct Corridor
     private Vector256<double> lowB;
     private Vector256<double> highA;
     private Vector256<double> highB;
-    private Vector256<double> boxLow;
-    private Vector256<double> boxHigh;
+    private Vector256<double> innerLowA;
+    private Vector256<double> innerLowB;
+    private Vector256<double> innerHighA;
+    private Vector256<double> innerHighB;
 
-    /// <summary>A corridor that allows everything.</summary>
-    public static Corridor Open
+    /// <summary>Allows everything.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    public void Open()
     {
-        get
-        {
-            var (low, high) = (Vector256.Create(double.NegativeInfinity), Vector256.Create(double.PositiveInfinity));
-            return new Corridor { lowA = low, lowB = low, highA = high, highB = high, boxLow = low, boxHigh = high };
-        }
+        lowA = lowB = innerLowA = innerLowB = Vector256.Create(double.NegativeInfinity);
+        highA = highB = innerHighA = innerHighB = Vector256.Create(double.PositiveInfinity);
     }
 
     /// <summary>Whether nothing is left, for sure.</summary>
@@ -44,12 +44,13 @@ internal struct Corridor
     /// <summary>Whether a velocity suits every frame so far, for sure.</summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     public readonly bool Accepts(in Reading velocity) =>
-        ((Vector256.LessThan(velocity.A, boxLow) | Vector256.GreaterThan(velocity.A, boxHigh)).ExtractMostSignificantBits() & 7) == 0;
+        (Vector256.LessThan(velocity.A, innerLowA) | Vector256.GreaterThan(velocity.A, innerHighA) |
+         Vector256.LessThan(velocity.B, innerLowB) | Vector256.GreaterThan(velocity.B, innerHighB)).ExtractMostSignificantBits() == 0;
 
     /// <summary>Puts in the ball of a frame.</summary>
     /// <param name="centre">Its centre.</param>
     /// <param name="outer">Necessary radius.</param>
-    /// <param name="inner">Half the side of the cube inside the sufficient ball; negative where there is none.</param>
+    /// <param name="inner">Half-width, along all directions, that stays inside the sufficient ball; negative where there is none.</param>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     public void Narrow(in Reading centre, double outer, double inner)
     {
@@ -58,8 +59,36 @@ internal struct Corridor
         highA = Vector256.MinNative(highA, centre.A + radius);
         lowB = Vector256.MaxNative(lowB, centre.B - radius);
         highB = Vector256.MinNative(highB, centre.B + radius);
-        boxLow = Vector256.MaxNative(boxLow, centre.A - side);
-        boxHigh = Vector256.MinNative(boxHigh, centre.A + side);
+        innerLowA = Vector256.MaxNative(innerLowA, centre.A - side);
+        innerHighA = Vector256.MinNative(innerHighA, centre.A + side);
+        innerLowB = Vector256.MaxNative(innerLowB, centre.B - side);
+        innerHighB = Vector256.MinNative(innerHighB, centre.B + side);
+    }
+
+    /// <summary>Puts in the balls of four frames.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
+    public void Narrow(ref FourBalls four)
+    {
+        // The bounds stay in registers meanwhile.
+        var (la, lb, ha, hb) = (lowA, lowB, highA, highB);
+        var (ila, ilb, iha, ihb) = (innerLowA, innerLowB, innerHighA, innerHighB);
+        for (var k = 0; k < 4; k++)
+        {
+            var centre = four.Centre(k);
+            var radius = Vector256.Create(FourBalls.At(ref four.Outer, k));
+            var side = Vector256.Create(FourBalls.At(ref four.Inner, k));
+            la = Vector256.MaxNative(la, centre.A - radius);
+            ha = Vector256.MinNative(ha, centre.A + radius);
+            lb = Vector256.MaxNative(lb, centre.B - radius);
+            hb = Vector256.MinNative(hb, centre.B + radius);
+            ila = Vector256.MaxNative(ila, centre.A - side);
+            iha = Vector256.MinNative(iha, centre.A + side);
+            ilb = Vector256.MaxNative(ilb, centre.B - side);
+            ihb = Vector256.MinNative(ihb, centre.B + side);
+        }
+
+        (lowA, lowB, highA, highB) = (la, lb, ha, hb);
+        (innerLowA, innerLowB, innerHighA, innerHighB) = (ila, ilb, iha, ihb);
     }
 
     /// <summary>Leaves nothing.</summary>

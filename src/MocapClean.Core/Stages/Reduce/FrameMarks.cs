@@ -61,7 +61,16 @@ internal sealed class FrameMarks : IDisposable
     public ReadOnlySpan<int> Rising(int from, int to)
     {
         var level = order.AsSpan(from, to - from);
-        level.Sort();
+        for (var n = 1; n < level.Length; n++)
+        {
+            // Most levels were marked in this order.
+            if (level[n] < level[n - 1])
+            {
+                level.Sort();
+                break;
+            }
+        }
+
         return level;
     }
 

@@ -22,6 +22,11 @@ internal static class KeyBalance
     private static int Best<TCurve>(Stretch stretch, int before, int key, int after, SpanLimits limits)
         where TCurve : struct, ICurve<TCurve>
     {
+        if (after - before == 2)
+        {
+            return key;
+        }
+
         var best = key;
         var error = Error<TCurve>(stretch, before, key, after, double.PositiveInfinity);
         for (var n = Math.Max(before + 1, key - Reach); n <= Math.Min(after - 1, key + Reach); n++)

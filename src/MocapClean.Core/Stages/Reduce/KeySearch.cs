@@ -47,9 +47,10 @@ internal sealed class KeySearch<TCurve> : IDisposable
         // A frame turned further than the widest key and the tolerance: playback that never turns back cannot pass it and return.
         cosHopeless = Math.Cos(Math.Min(Math.PI, limits.Widest + limits.Tolerance) / 2) - 1e-9;
         latest = ArrayPool<int>.Shared.Rent(stretch.Count);
+        var time = stretch.Time;
         for (var (n, end) = (0, 0); n < stretch.Count; n++)
         {
-            while (end + 1 < stretch.Count && stretch.Time[end + 1] - stretch.Time[n] <= limits.Longest)
+            while (end + 1 < stretch.Count && time[end + 1] - time[n] <= limits.Longest)
             {
                 end++;
             }
@@ -124,19 +125,20 @@ internal sealed class KeySearch<TCurve> : IDisposable
             balls.Of(stretch.Four(block), stretch.Times(block), ref four);
             for (var (n, k) = (block, 0); k < 4 && n <= last; n++, k++)
             {
-                if (Math.Abs(four.Facing[k]) < cosHopeless)
+                var facing = FourBalls.At(ref four.Facing, k);
+                if (Math.Abs(facing) < cosHopeless)
                 {
                     return;
                 }
 
                 var velocity = four.Centre(k);
-                if (!marks.Contains(n) && TCurve.CosHalfTurn(four.Facing[k]) >= cosWidest &&
+                if (!marks.Contains(n) && TCurve.CosHalfTurn(facing) >= cosWidest &&
                     !corridor.Refutes(velocity) && Plays(key, first, n, velocity))
                 {
                     marks.Mark(n, key);
                 }
 
-                corridor.Narrow(velocity, four.Outer[k], four.Inner[k]);
+                corridor.Narrow(velocity, FourBalls.At(ref four.Outer, k), FourBalls.At(ref four.Inner, k));
                 if (corridor.IsEmpty)
                 {
                     return;
@@ -148,7 +150,7 @@ internal sealed class KeySearch<TCurve> : IDisposable
     private void Begin(int key, double stray)
     {
         balls = new VelocityBalls(stretch, key, tolerance + stray, tolerance - stray);
-        corridor = Corridor.Open;
+        corridor.Open();
         (isWhole, spent) = (false, 0);
     }
 
@@ -229,11 +231,7 @@ internal sealed class KeySearch<TCurve> : IDisposable
     {
         FourBalls four = default;
         balls.Of(stretch.Four(a, b, c, d), stretch.Times(a, b, c, d), ref four);
-        for (var k = 0; k < 4; k++)
-        {
-            corridor.Narrow(four.Centre(k), four.Outer[k], four.Inner[k]);
-        }
-
+        corridor.Narrow(ref four);
         if (Vector256.LessThanAny(Vector256.Abs(four.Facing), Vector256.Create(cosHopeless)))
         {
             corridor.Close();

@@ -9,9 +9,6 @@ namespace MocapClean.Core.Stages.Reduce;
 /// </summary>
 internal static class Sine
 {
-    /// <summary>Up to this angle <see cref="OfShort"/> is as exact as <see cref="Of"/>.</summary>
-    public const double ShortReach = 0.5;
-
     /// <summary>Sines and cosines, each within 1e-15 up to pi/2.</summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     public static (Vector256<double> Sine, Vector256<double> Cosine) Of(Vector256<double> angle)
@@ -32,26 +29,6 @@ internal static class Sine
         c = Next(c, z, 1 / 20922789888000.0);
         c = Next(c, z, -1 / 87178291200.0);
         c = Next(c, z, 1 / 479001600.0);
-        c = Next(c, z, -1 / 3628800.0);
-        c = Next(c, z, 1 / 40320.0);
-        c = Next(c, z, -1 / 720.0);
-        c = Next(c, z, 1 / 24.0);
-        c = Next(c, z, -0.5);
-        return (angle + (angle * (z * s)), Next(c, z, 1));
-    }
-
-    /// <summary>The same with fewer terms, for angles up to <see cref="ShortReach"/>.</summary>
-    [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    public static (Vector256<double> Sine, Vector256<double> Cosine) OfShort(Vector256<double> angle)
-    {
-        var z = angle * angle;
-        var s = Vector256.Create(1 / 6227020800.0);
-        s = Next(s, z, -1 / 39916800.0);
-        s = Next(s, z, 1 / 362880.0);
-        s = Next(s, z, -1 / 5040.0);
-        s = Next(s, z, 1 / 120.0);
-        s = Next(s, z, -1 / 6.0);
-        var c = Vector256.Create(1 / 479001600.0);
         c = Next(c, z, -1 / 3628800.0);
         c = Next(c, z, 1 / 40320.0);
         c = Next(c, z, -1 / 720.0);

@@ -11,7 +11,6 @@ internal readonly struct SlerpCurve : ICurve<SlerpCurve>
     private readonly FourQuats square;
     private readonly Vector256<double> start;
     private readonly Vector256<double> speed;
-    private readonly bool isShort;
 
     private SlerpCurve(Quat a, Quat e, double halfTurn, double start, double duration)
     {
@@ -19,7 +18,6 @@ internal readonly struct SlerpCurve : ICurve<SlerpCurve>
         square = Spread(e);
         this.start = Vector256.Create(start);
         speed = Vector256.Create(halfTurn / duration);
-        isShort = halfTurn < Sine.ShortReach / 2;
     }
 
     /// <inheritdoc/>
@@ -44,7 +42,7 @@ internal readonly struct SlerpCurve : ICurve<SlerpCurve>
     public Vector256<double> SquaredChords(Vector256<double> time, in FourQuats samples)
     {
         var angle = (time - start) * speed;
-        var (s, c) = isShort ? Sine.OfShort(angle) : Sine.Of(angle);
+        var (s, c) = Sine.Of(angle);
         var played = new FourQuats(
             (c * from.W) + (s * square.W), (c * from.X) + (s * square.X), (c * from.Y) + (s * square.Y), (c * from.Z) + (s * square.Z));
         return FourQuats.SquaredChords(played, samples);

@@ -34,23 +34,17 @@ internal static class SpanCheck
 
         var curve = Between<TCurve>(stretch, first, last);
         var most = Vector256.Create(limit);
-        for (var k = 0; k < Suspects.Count; k += 4)
+        // The suspects come first, as blocks before the first frame, so that the curve stands in the code once and is inlined.
+        for (var n = first + 1 - Suspects.Count; n < last; n += 4)
         {
-            var (a, b) = (suspects.Inside(k, first, last), suspects.Inside(k + 1, first, last));
-            var (c, d) = (suspects.Inside(k + 2, first, last), suspects.Inside(k + 3, first, last));
-            var found = Beyond(curve, stretch.Times(a, b, c, d), stretch.Four(a, b, c, d), most);
-            if (found != 0)
-            {
-                return BitOperations.TrailingZeroCount(found) switch { 0 => a, 1 => b, 2 => c, _ => d };
-            }
-        }
-
-        for (var n = first + 1; n < last; n += 4)
-        {
-            var bits = Beyond(curve, stretch.Times(n), stretch.Four(n), most) & (last - n < 4 ? (1u << (last - n)) - 1 : 15);
+            var (a, b, c, d) = n > first ? (n, n + 1, n + 2, n + 3) : suspects.Inside(n + Suspects.Count - first - 1, first, last);
+            var times = n > first ? stretch.Times(n) : stretch.Times(a, b, c, d);
+            var samples = n > first ? stretch.Four(n) : stretch.Four(a, b, c, d);
+            var bits = Vector256.GreaterThan(curve.SquaredChords(times, samples), most).ExtractMostSignificantBits();
+            bits &= n > first && last - n < 4 ? (1u << (last - n)) - 1 : 15;
             if (bits != 0)
             {
-                return n + BitOperations.TrailingZeroCount(bits);
+                return BitOperations.TrailingZeroCount(bits) switch { 0 => a, 1 => b, 2 => c, _ => d };
             }
         }
 
@@ -62,6 +56,11 @@ internal static class SpanCheck
     public static double Largest<TCurve>(Stretch stretch, int first, int last, double ceiling)
         where TCurve : struct, ICurve<TCurve>
     {
+        if (last - first < 2)
+        {
+            return 0;
+        }
+
         var curve = Between<TCurve>(stretch, first, last);
         var (largest, most) = (Vector256<double>.Zero, Vector256.Create(ceiling));
         for (var n = first + 1; n < last; n += 4)
@@ -85,9 +84,4 @@ internal static class SpanCheck
     private static TCurve Between<TCurve>(Stretch stretch, int first, int last)
         where TCurve : struct, ICurve<TCurve> =>
         TCurve.Through(stretch[first], stretch[last], stretch.Time[first], stretch.Time[last]);
-
-    [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    private static uint Beyond<TCurve>(in TCurve curve, Vector256<double> times, in FourQuats samples, Vector256<double> most)
-        where TCurve : struct, ICurve<TCurve> =>
-        Vector256.GreaterThan(curve.SquaredChords(times, samples), most).ExtractMostSignificantBits();
 }

@@ -12,7 +12,7 @@ internal readonly record struct SpanLimits(double Tolerance, double Widest, doub
     public const double Hair = 1 - 1e-9;
 
     /// <summary>The cosine of half the widest turn.</summary>
-    public double CosWidest => Math.Cos(Widest * Hair / 2);
+    public double CosWidest { get; } = Math.Cos(Widest * Hair / 2);
 
     /// <summary>Whether turn and time allow a span.</summary>
     public bool Allow<TCurve>(Stretch stretch, int first, int last)

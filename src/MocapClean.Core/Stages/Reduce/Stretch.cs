@@ -26,15 +26,17 @@ internal sealed class Stretch : IDisposable
         Count = samples.Length;
         stride = Count + Padding;
         numbers = ArrayPool<double>.Shared.Rent(5 * stride);
-        for (var n = 0; n < stride; n++)
+        Span<double> w = Row(0), x = Row(1), y = Row(2), z = Row(3), time = Row(4);
+        for (var n = 0; n < w.Length; n++)
         {
-            var from = Math.Min(n, Count - 1);
-            numbers[n] = samples[from].W;
-            numbers[n + stride] = samples[from].X;
-            numbers[n + (2 * stride)] = samples[from].Y;
-            numbers[n + (3 * stride)] = samples[from].Z;
-            // Relative to the first frame: a take that starts at 10:00 loses no digits.
-            numbers[n + (4 * stride)] = times[from] - times[0];
+            var from = Math.Min(n, samples.Length - 1);
+            var q = samples[from];
+            w[n] = q.W;
+            x[n] = q.X;
+            y[n] = q.Y;
+            z[n] = q.Z;
+            // Relative to the first frame: a take that starts at ten o'clock loses no digits.
+            time[n] = times[from] - times[0];
         }
     }
 
@@ -42,7 +44,7 @@ internal sealed class Stretch : IDisposable
     public int Count { get; }
 
     /// <summary>Seconds since the first frame.</summary>
-    public ReadOnlySpan<double> Time => numbers.AsSpan(4 * stride, stride);
+    public ReadOnlySpan<double> Time => Row(4);
 
     /// <summary>The orientation at a frame.</summary>
     public Quat this[int n] => new(numbers[n], numbers[n + stride], numbers[n + (2 * stride)], numbers[n + (3 * stride)]);
@@ -66,6 +68,8 @@ internal sealed class Stretch : IDisposable
 
     /// <inheritdoc/>
     public void Dispose() => ArrayPool<double>.Shared.Return(numbers);
+
+    private Span<double> Row(int row) => numbers.AsSpan(row * stride, stride);
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     private Vector256<double> Load(int at) => Vector256.LoadUnsafe(ref MemoryMarshal.GetArrayDataReference(numbers), (nuint)at);

@@ -17,6 +17,9 @@ internal sealed class Suspects
         return at >= 0;
     }
 
-    /// <summary>One of them, or the frame after the first key where it is not between the keys.</summary>
-    public int Inside(int at, int first, int last) => frames[at] > first && frames[at] < last ? frames[at] : first + 1;
+    /// <summary>Four of them, each replaced by the frame after the first key where it is not between the keys.</summary>
+    public (int A, int B, int C, int D) Inside(int at, int first, int last) =>
+        (One(at, first, last), One(at + 1, first, last), One(at + 2, first, last), One(at + 3, first, last));
+
+    private int One(int at, int first, int last) => frames[at] > first && frames[at] < last ? frames[at] : first + 1;
 }

@@ -14,7 +14,10 @@ internal readonly struct VelocityBalls
     /// <summary>Largest error of a rotation vector here, radians, with room to spare.</summary>
     private const double LogError = 2e-8;
 
-    private static readonly double Sqrt3 = Math.Sqrt(3);
+    /// <summary>
+    /// Length of the longest vector that reaches no further than 1 along any of the corridor's directions: (1, sqrt 3 - 1, 0).
+    /// </summary>
+    private const double Corner = 1.2393136749274760;
 
     private readonly Vector256<double> w;
     private readonly Vector256<double> x;
@@ -35,7 +38,7 @@ internal readonly struct VelocityBalls
         (w, x, y, z) = (Vector256.Create(q.W), Vector256.Create(q.X), Vector256.Create(q.Y), Vector256.Create(q.Z));
         start = Vector256.Create(stretch.Time[key]);
         this.necessary = Vector256.Create(necessary);
-        this.enough = Vector256.Create((enough - (2 * LogError)) / Sqrt3);
+        this.enough = Vector256.Create((enough - (2 * LogError)) / Corner);
     }
 
     /// <summary>Inner products of the key and four frames.</summary>
@@ -92,21 +95,4 @@ internal readonly struct VelocityBalls
         sum = (sum * square) + Vector256.Create(-0.3333328229550229);
         return (sum * square) + Vector256.Create(0.9999999975460191);
     }
-}
-
-/// <summary>The balls of four frames, number by number.</summary>
-internal struct FourBalls
-{
-    /// <summary>Centres, radians a second.</summary>
-    public Vector256<double> X, Y, Z;
-
-    /// <summary>Necessary radii, and half the sides of cubes that fit into the sufficient balls, radians a second.</summary>
-    public Vector256<double> Outer, Inner;
-
-    /// <summary>Inner products of the key and the frames: the cosine of half the turn, with the sign as written.</summary>
-    public Vector256<double> Facing;
-
-    /// <summary>The centre of one of the four, read along the directions of a corridor.</summary>
-    [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    public readonly Corridor.Reading Centre(int k) => new(X[k], Y[k], Z[k]);
 }
