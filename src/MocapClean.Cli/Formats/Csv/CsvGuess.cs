@@ -61,7 +61,7 @@ public sealed record CsvGuess
         var header = CsvHeader.Search(source.Bytes, start, names => NamingGuess.All(names).Any() ? names.Length : 0);
         foreach (var naming in header is null ? [] : NamingGuess.All(header.Names))
         {
-            var columns = new CsvColumns(naming.Joints, naming.Slots, Time: -1);
+            var columns = new CsvColumns(naming.Joints, naming.Slots, TimeColumn.Likeliest(header!));
             if (FirstRows.Read(source, header!, columns) is { HasOrientations: true } rows)
             {
                 return Build(source, header!, naming, rows);

@@ -17,6 +17,9 @@ internal static partial class TimeColumn
     /// <summary>The column's name sounds like a time.</summary>
     public static bool IsLikely(string name) => Rank(name) < Words.Length;
 
+    /// <summary>Index of the column that sounds most like a time; -1 where none does.</summary>
+    public static int Likeliest(CsvHeader header) => Likely(header).FirstOrDefault(-1);
+
     /// <summary>Name of the column that counts seconds; null where there is none.</summary>
     /// <param name="header">Names of the columns.</param>
     /// <param name="rows">What stands in them.</param>
@@ -24,7 +27,7 @@ internal static partial class TimeColumn
     /// <param name="notes">Receives what was found about times and frames.</param>
     public static string? Find(CsvHeader header, FirstRows rows, bool isLong, ImmutableArray<string>.Builder notes)
     {
-        foreach (var column in Enumerable.Range(0, header.Names.Length).Where(i => IsLikely(header.Names[i])).OrderBy(i => Rank(header.Names[i])))
+        foreach (var column in Likely(header))
         {
             if (Objection(rows.Numbers(column), isLong) is not { } objection)
             {
@@ -57,6 +60,9 @@ internal static partial class TimeColumn
             _ => null,
         };
     }
+
+    private static IEnumerable<int> Likely(CsvHeader header) => Enumerable.Range(0, header.Names.Length)
+        .Where(i => IsLikely(header.Names[i])).OrderBy(i => Rank(header.Names[i]));
 
     private static int Rank(string name)
     {

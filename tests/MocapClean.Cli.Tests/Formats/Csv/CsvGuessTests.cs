@@ -77,6 +77,15 @@ public sealed class CsvGuessTests
     }
 
     [Fact]
+    public void A_decimal_comma_in_the_times_alone_is_seen()
+    {
+        var guess = CsvGuess.From(Table.Source(Table.Bytes("time;a_QW;a_QX;a_QY;a_QZ\n0;1;0;0;0\n0,01;1;0;0;0\n")));
+
+        Assert.Equal(("time", true), (guess!.Time, guess.DecimalComma));
+        Assert.Empty(guess.Notes);
+    }
+
+    [Fact]
     public void Numbered_components_are_taken_with_w_first_and_said_so()
     {
         var guess = CsvGuess.From(Table.Source(Table.Bytes("time,a_q0,a_q1,a_q2,a_q3\n0,1,0,0,0\n0.1,1,0,0,0\n")));
