@@ -7,14 +7,22 @@ namespace MocapClean.Core.Stages.Smooth;
 /// <summary>
 /// Third-difference penalty whose strength follows the motion, strong where the joint rests and weak where it moves fast.
 /// First the four components are smoothed with the strength that <see cref="LocalStrength"/> finds around each sample. Along that rough curve
-/// the samples are unrolled (<see cref="Unrolled"/>) and each principal axis is smoothed with the same local strength times a factor of
-/// its own, chosen by Mallows' criterion (1973) with the exact trace. All in time linear in samples.
+/// the samples are unrolled (<see cref="Unrolled"/>), the local strength is found once more from there, and each principal axis is smoothed
+/// with that strength times a factor of its own, chosen by its estimated error. All traces are exact, all in time linear in samples.
 /// </summary>
 internal sealed class AdaptiveSmoother : ISmoother
 {
-    /// <summary>The factors tried, as logarithms: from e^-6 to e^6 of the local strength, which is a cutoff 2.7 times higher or lower.</summary>
-    private const double WidestLog = 6;
-    private const double LogStep = 2;
+    /// <summary>Two strengths are compared over two periods of the stronger one's cutoff: less is no more than its own memory ...</summary>
+    private const double Periods = 2;
+
+    /// <summary>... but over no less than a short movement takes ...</summary>
+    private const double ShortestSeconds = 0.4;
+
+    /// <summary>... and no more than a rest lasts.</summary>
+    private const double LongestSeconds = 4;
+
+    /// <summary>The second time, over the middle of these.</summary>
+    private const double SecondSeconds = 2;
 
     /// <inheritdoc/>
     public int Shortest => 10;
@@ -24,30 +32,54 @@ internal sealed class AdaptiveSmoother : ISmoother
     {
         var rows = new PenaltyRows(3, curve.Times, curve.Starts);
         using var fit = new PenalisedFit(rows);
-        var bank = new StrengthBank(curve, rows, fit);
-        var variance = Noise.Variance(bank.Squared[bank.Best], bank.Leverage[bank.Best], curve.Finest);
-        var local = LocalStrength.Choose(bank, curve, variance);
+        var logs = new double[curve.Length];
+        var local = new double[curve.Length];
+        var variance = FirstStrength(curve, fit, logs);
+        LocalStrength.OfRows(logs, local);
         var (rough, lengths) = Rough(curve, fit, local);
-
         var unrolled = new Unrolled(curve, rough);
+        // An angle is twice the length of its quaternion's vector.
+        SecondStrength(curve, fit, unrolled, 4 * variance, logs, local);
+        LocalStrength.OfRows(logs, local);
+
         var work = new Vector256<double>[curve.Length];
+        fit.Factor(Vector256<double>.One, local);
         fit.Fit(unrolled.Values, work);
         unrolled.AlignAxes(work, rows, local);
-        fit.Factor(Looseness(unrolled.Values, fit, local, 4 * variance, work), local);
-        var leverage = new Vector256<double>[curve.Length];
-        fit.Leverage(leverage);
-        fit.Fit(unrolled.Values, work);
-        var smoothed = new Quat[curve.Length];
-        for (var i = 0; i < smoothed.Length; i++)
+        using (var axes = new StrengthBank(fit, unrolled.Values, StrengthLadder.Near, local))
         {
-            smoothed[i] = lengths[i] * unrolled.Orientation(i, work[i]);
+            var (x, y, z) = (axes.LeastError(0, 4 * variance), axes.LeastError(1, 4 * variance), axes.LeastError(2, 4 * variance));
+            fit.Factor(Vector256.Create(x, y, z, 1), local);
         }
 
-        return new SmoothedCurve(smoothed, [.. leverage.Select(h => (h[0] + h[1] + h[2]) / 3)]);
+        return RollUp(unrolled, fit, lengths, work);
+    }
+
+    private static double FirstStrength(JointCurve curve, PenalisedFit fit, double[] logs)
+    {
+        var samples = MemoryMarshal.Cast<Quat, Vector256<double>>(curve.Samples);
+        using var bank = new StrengthBank(fit, samples, StrengthLadder.Whole(curve.Rate), []);
+        var variance = bank.NoiseVariance(bank.LeastCrossValidation().Rung, curve.Finest);
+        var windows = new double[bank.Groups];
+        for (var g = 0; g < windows.Length; g++)
+        {
+            var cutoff = StrengthLadder.Cutoff(bank.LogLooseness[g * StrengthBank.Lanes], curve.Rate);
+            windows[g] = Math.Clamp(Periods / cutoff, ShortestSeconds, LongestSeconds);
+        }
+
+        LocalStrength.Choose(bank, curve, windows, variance, logs);
+        return variance;
+    }
+
+    private static void SecondStrength(
+        JointCurve curve, PenalisedFit fit, Unrolled unrolled, double variance, double[] logs, ReadOnlySpan<double> local)
+    {
+        using var bank = new StrengthBank(fit, unrolled.Values, StrengthLadder.Around, local);
+        LocalStrength.Choose(bank, curve, [SecondSeconds, SecondSeconds], variance, logs);
     }
 
     // The components smoothed alike, at length 1, and the lengths before that. Where samples are too far apart to be averaged, they stand.
-    private static (Quat[] Rough, double[] Lengths) Rough(JointCurve curve, PenalisedFit fit, double[] local)
+    private static (Quat[] Rough, double[] Lengths) Rough(JointCurve curve, PenalisedFit fit, ReadOnlySpan<double> local)
     {
         var rough = new Quat[curve.Length];
         var lengths = new double[curve.Length];
@@ -62,53 +94,22 @@ internal sealed class AdaptiveSmoother : ISmoother
         return (rough, lengths);
     }
 
-    // For each axis the factor on the local looseness with the least estimated error.
-    private static Vector256<double> Looseness(
-        ReadOnlySpan<Vector256<double>> values, PenalisedFit fit, ReadOnlySpan<double> local, double variance, Span<Vector256<double>> work)
+    private static SmoothedCurve RollUp(Unrolled unrolled, PenalisedFit fit, double[] lengths, Vector256<double>[] work)
     {
-        var count = 1 + (int)(2 * WidestLog / LogStep);
-        var errors = new double[3][];
-        for (var axis = 0; axis < 3; axis++)
+        var leverage = new double[work.Length];
+        fit.Leverage(work);
+        for (var i = 0; i < work.Length; i++)
         {
-            errors[axis] = new double[count];
+            leverage[i] = (work[i][0] + work[i][1] + work[i][2]) / 3;
         }
 
-        for (var k = 0; k < count; k++)
+        var smoothed = new Quat[work.Length];
+        fit.Fit(unrolled.Values, work);
+        for (var i = 0; i < work.Length; i++)
         {
-            fit.Factor(Vector256.Create(Math.Exp((k * LogStep) - WidestLog)), local);
-            fit.Leverage(work);
-            var trace = Sum(work);
-            fit.Fit(values, work);
-            for (var i = 0; i < work.Length; i++)
-            {
-                var r = values[i] - work[i];
-                work[i] = r * r;
-            }
-
-            var error = Sum(work) + (2 * LocalStrength.Caution * variance * trace);
-            for (var axis = 0; axis < 3; axis++)
-            {
-                errors[axis][k] = error[axis];
-            }
+            smoothed[i] = lengths[i] * unrolled.Orientation(i, work[i]);
         }
 
-        return Vector256.Create(Foot(errors[0]), Foot(errors[1]), Foot(errors[2]), 1);
-    }
-
-    private static double Foot(double[] errors)
-    {
-        var best = Array.IndexOf(errors, errors.Min());
-        return Math.Exp(((best + Parabola.Lowest(errors, best)) * LogStep) - WidestLog);
-    }
-
-    private static Vector256<double> Sum(ReadOnlySpan<Vector256<double>> values)
-    {
-        var sum = Vector256<double>.Zero;
-        foreach (var v in values)
-        {
-            sum += v;
-        }
-
-        return sum;
+        return new SmoothedCurve(smoothed, leverage);
     }
 }

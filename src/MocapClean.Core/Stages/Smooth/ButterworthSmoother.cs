@@ -11,9 +11,9 @@ namespace MocapClean.Core.Stages.Smooth;
 /// <param name="cutoff">Hertz; NaN chooses by generalised cross-validation, one for the joint.</param>
 internal sealed class ButterworthSmoother(double cutoff) : ISmoother
 {
-    /// <summary>Cutoffs tried: from half a hertz up in steps of a sixth of an octave.</summary>
+    /// <summary>Cutoffs tried: from half a hertz up in steps of a third of an octave.</summary>
     private const double LowestTried = 0.5;
-    private const double StepsAnOctave = 6;
+    private const double StepsAnOctave = 3;
 
     /// <inheritdoc/>
     /// <remarks>More than three times the number of coefficients, the common rule for filters run both ways.</remarks>

@@ -1,10 +1,11 @@
 using System.Buffers;
+using System.Runtime.Intrinsics;
 
 namespace MocapClean.Core.Stages.Smooth;
 
 /// <summary>
-/// How strongly to smooth at each sample. Every strength of the bank is judged around the sample by Stein's unbiased estimate of its error,
-/// residual plus twice the noise times the leverage (Stein 1981); the strengths are averaged with exponential weights (Leung and Barron 2006).
+/// How strongly to smooth around each sample. Every strength of a bank is judged there by Stein's unbiased estimate of its error (1981),
+/// residual plus twice the noise times the leverage, and the strengths are averaged with exponential weights (Leung and Barron 2006).
 /// </summary>
 internal static class LocalStrength
 {
@@ -17,94 +18,120 @@ internal static class LocalStrength
     /// <summary>Temperature of the exponential weights in noise variances, the value for which Leung and Barron prove their bound.</summary>
     private const double Temperature = 4;
 
-    /// <summary>Two strengths are compared over two periods of the weaker one's cutoff: less is no more than its own memory ...</summary>
-    private const double Periods = 2;
-
-    /// <summary>... but over no less than a short movement takes ...</summary>
-    private const double ShortestSeconds = 0.4;
-
-    /// <summary>... and no more than a rest lasts.</summary>
-    private const double LongestSeconds = 4;
-
-    /// <summary>Time over which the strength may change, a movement.</summary>
+    /// <summary>Time over which the strength may change: a movement.</summary>
     private const double EaseSeconds = 0.6;
 
-    /// <summary>Looseness (one over the strength) of the difference that ends at each sample.</summary>
+    private static readonly Vector256<long> First = Vector256.Create(0L, 0, 0, 0);
+    private static readonly Vector256<long> Last = Vector256.Create(3L, 3, 3, 3);
+    private static readonly Vector256<long> OneOn = Vector256.Create(0L, 0, 1, 2);
+    private static readonly Vector256<long> TwoOn = Vector256.Create(0L, 0, 0, 1);
+    private static readonly Vector256<double> FromOne = Vector256.Create(0L, -1, -1, -1).AsDouble();
+    private static readonly Vector256<double> FromTwo = Vector256.Create(0L, 0, -1, -1).AsDouble();
+
+    /// <summary>Adds to each sample's logarithm of looseness the one that the bank holds best there.</summary>
     /// <param name="bank">The curve smoothed with each strength.</param>
-    /// <param name="curve">The curve.</param>
-    /// <param name="variance">Noise variance of an axis, in quaternion units.</param>
-    public static double[] Choose(StrengthBank bank, JointCurve curve, double variance)
+    /// <param name="curve">Stretches and rate.</param>
+    /// <param name="windows">Seconds over which the strengths of each group are compared, none longer than the first.</param>
+    /// <param name="variance">Noise variance of an axis, in the bank's units.</param>
+    /// <param name="logs">One logarithm a sample.</param>
+    public static void Choose(StrengthBank bank, JointCurve curve, ReadOnlySpan<double> windows, double variance, Span<double> logs)
     {
         var n = curve.Length;
-        var spare = ArrayPool<double>.Shared.Rent(2 * n);
-        var logs = new double[n];
-        var errors = Errors(bank, curve, variance, spare);
+        var pool = ArrayPool<Vector256<double>>.Shared;
+        var errors = pool.Rent(bank.Groups * n);
+        var chosen = pool.Rent(n);
+        var widest = MovingMean.Reach(Math.Max(EaseSeconds, windows[0]), curve.Rate);
+        var spare = pool.Rent(MovingMean.Room(n, widest));
+        Errors(bank, curve, windows, variance, errors, spare);
         for (var i = 0; i < n; i++)
         {
-            logs[i] = Average(bank.LogLooseness, errors, i, Temperature * variance);
+            chosen[i] = Average(bank, errors.AsSpan(i * bank.Groups, bank.Groups), Temperature * variance);
         }
 
-        MovingMean.Triangular(logs, curve.Starts, Reach(EaseSeconds, curve.Rate), spare);
-        ArrayPool<double>.Shared.Return(spare);
-        var local = new double[n];
-        for (var i = 2; i < n; i++)
+        MovingMean.Triangular(chosen.AsSpan(0, n), curve.Starts, MovingMean.Reach(EaseSeconds, curve.Rate), spare);
+        for (var i = 0; i < n; i++)
         {
-            // A third difference is centred between the two samples before its last.
+            logs[i] += chosen[i][0];
+        }
+
+        pool.Return(errors);
+        pool.Return(chosen);
+        pool.Return(spare);
+    }
+
+    /// <summary>Looseness of the third difference that ends at each sample, which is centred between the two samples before.</summary>
+    public static void OfRows(ReadOnlySpan<double> logs, Span<double> local)
+    {
+        for (var i = 2; i < logs.Length; i++)
+        {
             local[i] = Math.Exp((logs[i - 1] + logs[i - 2]) / 2);
         }
-
-        return local;
     }
 
     // Estimated error of each strength around each sample, less that of the strongest: made up of the steps from rung to rung, each averaged
-    // over its own window and counted as often as a triangle of that width counts.
-    private static double[][] Errors(StrengthBank bank, JointCurve curve, double variance, double[] spare)
+    // over the window of its group and counted as often as a triangle of that width counts. All groups of a sample lie together.
+    private static void Errors(
+        StrengthBank bank, JointCurve curve, ReadOnlySpan<double> windows, double variance, Vector256<double>[] errors, Vector256<double>[] spare)
     {
-        var n = curve.Length;
-        var errors = new double[bank.Cutoffs.Length][];
-        errors[0] = new double[n];
-        var penalty = 2 * Caution * 3 * variance;
-        for (var k = 1; k < errors.Length; k++)
+        var (n, groups) = (curve.Length, bank.Groups);
+        var rented = ArrayPool<Vector256<double>>.Shared.Rent(n);
+        var steps = rented.AsSpan(0, n);
+        for (var g = 0; g < groups; g++)
         {
-            var step = new double[n];
+            Steps(bank, g, 2 * Caution * 3 * variance, steps);
+            var reach = MovingMean.Reach(windows[g], curve.Rate);
+            MovingMean.Triangular(steps, curve.Starts, reach, spare);
             for (var i = 0; i < n; i++)
             {
-                step[i] = bank.Squared[k][i] - bank.Squared[k - 1][i] + (penalty * (bank.Leverage[k][i] - bank.Leverage[k - 1][i]));
+                // Running sums within the group in two turns, on top of the last rung of the group before.
+                var sums = 3 * reach * steps[i];
+                sums += Vector256.Shuffle(sums, OneOn) & FromOne;
+                sums += Vector256.Shuffle(sums, TwoOn) & FromTwo;
+                errors[(i * groups) + g] = g == 0 ? sums : sums + Vector256.Shuffle(errors[(i * groups) + g - 1], Last);
             }
-
-            var reach = Reach(Math.Clamp(Periods / bank.Cutoffs[k], ShortestSeconds, LongestSeconds), curve.Rate);
-            MovingMean.Triangular(step, curve.Starts, reach, spare);
-            for (var i = 0; i < n; i++)
-            {
-                step[i] = errors[k - 1][i] + (3 * reach * step[i]);
-            }
-
-            errors[k] = step;
         }
 
-        return errors;
+        ArrayPool<Vector256<double>>.Shared.Return(rented);
     }
 
-    private static double Average(double[] logLooseness, double[][] errors, int i, double temperature)
+    // From each rung of a group to the next, the first one from the last rung of the group before.
+    private static void Steps(StrengthBank bank, int group, double penalty, Span<Vector256<double>> steps)
     {
-        var least = double.PositiveInfinity;
+        var squared = bank.Squared(group);
+        var leverage = bank.Leverage(group);
+        var squaredBefore = bank.Squared(Math.Max(0, group - 1));
+        var leverageBefore = bank.Leverage(Math.Max(0, group - 1));
+        for (var i = 0; i < steps.Length; i++)
+        {
+            var rungs = squared[i] + (penalty * leverage[i]);
+            var earlier = group == 0 ? Vector256.Shuffle(rungs, First) : Vector256.Shuffle(squaredBefore[i] + (penalty * leverageBefore[i]), Last);
+            steps[i] = rungs - Vector256.ConditionalSelect(FromOne, Vector256.Shuffle(rungs, OneOn), earlier);
+        }
+    }
+
+    // exp(-x) as (1 - x / 1024)^1024, whose weights differ by less than a hundredth where they matter; for all lanes at once.
+    private static Vector256<double> Average(StrengthBank bank, ReadOnlySpan<Vector256<double>> errors, double temperature)
+    {
+        var least = errors[0];
         foreach (var e in errors)
         {
-            least = Math.Min(least, e[i]);
+            least = Vector256.Min(least, e);
         }
 
-        var (sum, weights) = (0.0, 0.0);
-        for (var k = 0; k < errors.Length; k++)
+        var lowest = Vector256.Create(Math.Min(Math.Min(least[0], least[1]), Math.Min(least[2], least[3])));
+        var (sum, weights) = (Vector256<double>.Zero, Vector256<double>.Zero);
+        for (var g = 0; g < errors.Length; g++)
         {
-            var cold = (errors[k][i] - least) / temperature;
-            var weight = cold < 40 ? Math.Exp(-cold) : 0;
-            sum += weight * logLooseness[k];
+            var weight = Vector256.Max(Vector256<double>.Zero, Vector256<double>.One - ((errors[g] - lowest) / (temperature * 1024)));
+            for (var turn = 0; turn < 10; turn++)
+            {
+                weight *= weight;
+            }
+
+            sum += weight * Vector256.Create(bank.LogLooseness, g * StrengthBank.Lanes);
             weights += weight;
         }
 
-        return sum / weights;
+        return Vector256.Create(Vector256.Sum(sum) / Vector256.Sum(weights));
     }
-
-    // A triangle of this whole width is two even windows of half of it.
-    private static int Reach(double seconds, double rate) => Math.Max(1, (int)Math.Round(seconds * rate / 4));
 }

@@ -1,4 +1,4 @@
-using MocapClean.Core.Kernels;
+using MathNet.Numerics.Statistics;
 
 namespace MocapClean.Core.Stages.Smooth;
 
@@ -23,6 +23,6 @@ internal static class Noise
             scaled[i] = squared[i] / Math.Max(1 - leverage[i], 1e-12);
         }
 
-        return Math.Max(RobustSpread.MedianInPlace(scaled) / MedianOfThree, finest * finest / 4);
+        return Math.Max(ArrayStatistics.MedianInplace(scaled) / MedianOfThree, finest * finest / 4);
     }
 }

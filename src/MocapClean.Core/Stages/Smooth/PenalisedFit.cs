@@ -1,7 +1,7 @@
 using System.Buffers;
+using System.Runtime.CompilerServices;
 using System.Runtime.InteropServices;
 using System.Runtime.Intrinsics;
-using MocapClean.Core.Orientation;
 
 namespace MocapClean.Core.Stages.Smooth;
 
@@ -17,16 +17,15 @@ namespace MocapClean.Core.Stages.Smooth;
 /// </summary>
 internal sealed class PenalisedFit : IDisposable
 {
-    private static readonly Vector256<double> Two = Vector256.Create(2.0);
     private readonly PenaltyRows _rows;
-    private readonly Gain[] _gains;
+    private readonly CurveSpread.Gain[] _gains;
     private readonly Vector256<double>[] _surprises;
 
     /// <summary>Makes room for fits with these rows.</summary>
     public PenalisedFit(PenaltyRows rows)
     {
         _rows = rows;
-        _gains = ArrayPool<Gain>.Shared.Rent(rows.Length);
+        _gains = ArrayPool<CurveSpread.Gain>.Shared.Rent(rows.Length);
         _surprises = ArrayPool<Vector256<double>>.Shared.Rent(4 * rows.Length);
     }
 
@@ -35,38 +34,26 @@ internal sealed class PenalisedFit : IDisposable
     /// <param name="local">One over the local strength, at the last sample of each difference; empty where it is 1 throughout.</param>
     public void Factor(Vector256<double> looseness, ReadOnlySpan<double> local)
     {
-        var steps = _rows.Steps;
-        var order = _rows.Order;
         for (var s = 0; s + 1 < _rows.Starts.Length; s++)
         {
-            var first = _rows.Starts[s] + order;
-            var p = Spread.Of(Beginning(first), order);
-            for (var i = first; i < _rows.Starts[s + 1]; i++)
-            {
-                var push = (local.IsEmpty ? steps[i].Push : steps[i].Push * local[i]) * looseness;
-                p.Advance(steps[i], push, order);
-                _gains[i] = p.Correct();
-            }
+            var first = _rows.Starts[s] + _rows.Order;
+            var spread = CurveSpread.Of(_rows.Beginning(first));
+            spread.Forwards(_rows, first, _rows.Starts[s + 1], looseness, local, _gains);
         }
     }
 
     /// <summary>Leverage of each sample, a lane each, for the last <see cref="Factor"/>.</summary>
     public void Leverage(Span<Vector256<double>> leverage)
     {
-        var steps = _rows.Steps;
         for (var s = 0; s + 1 < _rows.Starts.Length; s++)
         {
             var first = _rows.Starts[s] + _rows.Order;
-            var later = default(Spread);
-            for (var i = _rows.Starts[s + 1] - 1; i >= first; i--)
+            var later = default(CurveSpread);
+            later.Backwards(_rows, first, _rows.Starts[s + 1], _gains, leverage);
+            var from = _rows.Beginning(first);
+            for (var k = 0; k < from.Length; k++)
             {
-                leverage[i] = Vector256<double>.One - later.Retreat(_gains[i], steps[i]);
-            }
-
-            var from = Beginning(first);
-            for (var k = 0; k < _rows.Order; k++)
-            {
-                leverage[first - _rows.Order + k] = Vector256<double>.One - later.Seen(from[k]);
+                leverage[first - from.Length + k] = Vector256<double>.One - later.Seen(from[k]);
             }
         }
     }
@@ -74,130 +61,119 @@ internal sealed class PenalisedFit : IDisposable
     /// <summary>The fitted curve of each lane; both spans may be the same.</summary>
     public void Fit(ReadOnlySpan<Vector256<double>> y, Span<Vector256<double>> z)
     {
-        var steps = _rows.Steps;
         for (var s = 0; s + 1 < _rows.Starts.Length; s++)
         {
-            var first = _rows.Starts[s] + _rows.Order;
-            var from = Beginning(first);
-            var state = default(State);
-            for (var k = 0; k < _rows.Order; k++)
-            {
-                state.Begin(from[k], y[first - _rows.Order + k]);
-            }
-
-            for (var i = first; i < _rows.Starts[s + 1]; i++)
-            {
-                _surprises[i] = state.Forwards(_gains[i], steps[i], y[i]);
-            }
-
-            var back = default(State);
-            for (var i = _rows.Starts[s + 1] - 1; i >= first; i--)
-            {
-                z[i] = y[i] - back.Backwards(_gains[i], steps[i], _surprises[i]);
-            }
-
-            for (var k = 0; k < _rows.Order; k++)
-            {
-                z[first - _rows.Order + k] = y[first - _rows.Order + k] + back.Seen(from[k]);
-            }
+            Fit(y, z, _rows.Starts[s] + _rows.Order, _rows.Starts[s + 1]);
         }
     }
 
     /// <summary>
-    /// Squared length of y - z over the four components of a quaternion curve, for the strength of each lane: the four curves are fitted
-    /// together, so their chains of operations overlap.
+    /// Squared residuals of four curves, the lanes of y, each fitted with the strength of every lane: the four chains of operations overlap.
     /// </summary>
-    public void SquaredResiduals(ReadOnlySpan<Quat> y, Span<Vector256<double>> squared)
+    /// <param name="y">A curve a lane.</param>
+    /// <param name="squared">Sum over the four curves at each sample, for the strength of each lane.</param>
+    /// <param name="totals">Sum over the samples for each of the four curves, for the strength of each lane.</param>
+    public void SquaredResiduals(ReadOnlySpan<Vector256<double>> y, Span<Vector256<double>> squared, Span<Vector256<double>> totals)
     {
+        totals.Clear();
         for (var s = 0; s + 1 < _rows.Starts.Length; s++)
         {
-            SquaredResiduals(y, squared, _rows.Starts[s], _rows.Starts[s + 1]);
+            var first = _rows.Starts[s] + _rows.Order;
+            Surprises(y, first, _rows.Starts[s + 1]);
+            Squares(squared, totals, first, _rows.Starts[s + 1]);
         }
     }
 
     /// <inheritdoc/>
     public void Dispose()
     {
-        ArrayPool<Gain>.Shared.Return(_gains);
+        ArrayPool<CurveSpread.Gain>.Shared.Return(_gains);
         ArrayPool<Vector256<double>>.Shared.Return(_surprises);
     }
 
-    private void SquaredResiduals(ReadOnlySpan<Quat> y, Span<Vector256<double>> squared, int start, int end)
+    private void Fit(ReadOnlySpan<Vector256<double>> y, Span<Vector256<double>> z, int first, int end)
     {
         var steps = _rows.Steps;
-        var first = start + _rows.Order;
-        var from = Beginning(first);
-        State w = default, x = default, yy = default, zz = default;
-        for (var k = 0; k < _rows.Order; k++)
+        var from = _rows.Beginning(first);
+        var state = default(State);
+        for (var k = 0; k < from.Length; k++)
         {
-            var q = y[start + k];
-            w.Begin(from[k], Vector256.Create(q.W));
-            x.Begin(from[k], Vector256.Create(q.X));
-            yy.Begin(from[k], Vector256.Create(q.Y));
-            zz.Begin(from[k], Vector256.Create(q.Z));
+            state.Begin(from[k], y[first - from.Length + k]);
         }
 
         for (var i = first; i < end; i++)
         {
-            var q = y[i];
-            _surprises[4 * i] = w.Forwards(_gains[i], steps[i], Vector256.Create(q.W));
-            _surprises[(4 * i) + 1] = x.Forwards(_gains[i], steps[i], Vector256.Create(q.X));
-            _surprises[(4 * i) + 2] = yy.Forwards(_gains[i], steps[i], Vector256.Create(q.Y));
-            _surprises[(4 * i) + 3] = zz.Forwards(_gains[i], steps[i], Vector256.Create(q.Z));
+            _surprises[i] = state.Forwards(_gains[i], steps[i], y[i]);
         }
 
-        w = x = yy = zz = default;
+        var back = default(State);
         for (var i = end - 1; i >= first; i--)
         {
-            var a = w.Backwards(_gains[i], steps[i], _surprises[4 * i]);
-            var b = x.Backwards(_gains[i], steps[i], _surprises[(4 * i) + 1]);
-            var c = yy.Backwards(_gains[i], steps[i], _surprises[(4 * i) + 2]);
-            var d = zz.Backwards(_gains[i], steps[i], _surprises[(4 * i) + 3]);
-            squared[i] = (a * a) + (b * b) + (c * c) + (d * d);
+            z[i] = y[i] - back.Backwards(_gains[i], steps[i], _surprises[i]);
         }
 
-        for (var k = 0; k < _rows.Order; k++)
+        for (var k = 0; k < from.Length; k++)
         {
-            var (a, b, c, d) = (w.Seen(from[k]), x.Seen(from[k]), yy.Seen(from[k]), zz.Seen(from[k]));
-            squared[start + k] = (a * a) + (b * b) + (c * c) + (d * d);
+            z[first - from.Length + k] = y[first - from.Length + k] + back.Seen(from[k]);
         }
     }
 
-    // What each of the first samples of a stretch adds to value, slope and bend (divided differences) at the last of them.
-    private Share[] Beginning(int first)
+    private void Surprises(ReadOnlySpan<Vector256<double>> y, int first, int end)
     {
-        var order = _rows.Order;
         var steps = _rows.Steps;
-        var shares = new Share[order];
-        shares[order - 1].Value = 1;
-        if (order >= 2)
+        var from = _rows.Beginning(first);
+        State a = default, b = default, c = default, d = default;
+        for (var k = 0; k < from.Length; k++)
         {
-            var (one, two) = (steps[first - 1].One, steps[first - 1].Two);
-            shares[order - 1].Slope = 1 / one;
-            shares[order - 2].Slope = -1 / one;
-            if (order == 3)
-            {
-                var before = steps[first - 2].One;
-                shares[2].Bend = 1 / (one * two);
-                shares[1].Bend = -((1 / one) + (1 / before)) / two;
-                shares[0].Bend = 1 / (before * two);
-            }
+            var v = y[first - from.Length + k];
+            a.Begin(from[k], Vector256.Create(v[0]));
+            b.Begin(from[k], Vector256.Create(v[1]));
+            c.Begin(from[k], Vector256.Create(v[2]));
+            d.Begin(from[k], Vector256.Create(v[3]));
         }
 
-        return shares;
+        var surprises = _surprises.AsSpan(4 * first, 4 * (end - first));
+        for (var i = first; i < end; i++)
+        {
+            var four = surprises.Slice(4 * (i - first), 4);
+            ref readonly var gain = ref _gains[i];
+            ref readonly var step = ref steps[i];
+            four[0] = a.Forwards(gain, step, Vector256.Create(y[i][0]));
+            four[1] = b.Forwards(gain, step, Vector256.Create(y[i][1]));
+            four[2] = c.Forwards(gain, step, Vector256.Create(y[i][2]));
+            four[3] = d.Forwards(gain, step, Vector256.Create(y[i][3]));
+        }
     }
 
-    [StructLayout(LayoutKind.Auto)]
-    private struct Share
+    private void Squares(Span<Vector256<double>> squared, Span<Vector256<double>> totals, int first, int end)
     {
-        public double Value;
-        public double Slope;
-        public double Bend;
-    }
+        var steps = _rows.Steps;
+        State a = default, b = default, c = default, d = default;
+        var (ta, tb, tc, td) = (totals[0], totals[1], totals[2], totals[3]);
+        var surprises = _surprises.AsSpan(4 * first, 4 * (end - first));
+        for (var i = end - 1; i >= first; i--)
+        {
+            var four = surprises.Slice(4 * (i - first), 4);
+            ref readonly var gain = ref _gains[i];
+            ref readonly var step = ref steps[i];
+            var (ra, rb) = (a.Backwards(gain, step, four[0]), b.Backwards(gain, step, four[1]));
+            var (rc, rd) = (c.Backwards(gain, step, four[2]), d.Backwards(gain, step, four[3]));
+            (ra, rb, rc, rd) = (ra * ra, rb * rb, rc * rc, rd * rd);
+            squared[i] = ra + rb + (rc + rd);
+            (ta, tb, tc, td) = (ta + ra, tb + rb, tc + rc, td + rd);
+        }
 
-    [StructLayout(LayoutKind.Auto)]
-    private readonly record struct Gain(
-        Vector256<double> Value, Vector256<double> Slope, Vector256<double> Bend, Vector256<double> Sureness);
+        var from = _rows.Beginning(first);
+        for (var k = 0; k < from.Length; k++)
+        {
+            var (ra, rb, rc, rd) = (a.Seen(from[k]), b.Seen(from[k]), c.Seen(from[k]), d.Seen(from[k]));
+            (ra, rb, rc, rd) = (ra * ra, rb * rb, rc * rc, rd * rd);
+            squared[first - from.Length + k] = ra + rb + (rc + rd);
+            (ta, tb, tc, td) = (ta + ra, tb + rb, tc + rc, td + rd);
+        }
+
+        (totals[0], totals[1], totals[2], totals[3]) = (ta, tb, tc, td);
+    }
 
     /// <summary>Value, slope and bend of a curve; on the way back, what later samples have to say about them.</summary>
     [StructLayout(LayoutKind.Auto)]
@@ -207,14 +183,15 @@ internal sealed class PenalisedFit : IDisposable
         private Vector256<double> _slope;
         private Vector256<double> _bend;
 
-        public void Begin(Share share, Vector256<double> y)
+        public void Begin(PenaltyRows.Share share, Vector256<double> y)
         {
             _value += share.Value * y;
             _slope += share.Slope * y;
             _bend += share.Bend * y;
         }
 
-        public Vector256<double> Forwards(in Gain gain, in PenaltyRows.Step step, Vector256<double> y)
+        [MethodImpl(MethodImplOptions.AggressiveInlining)]
+        public Vector256<double> Forwards(in CurveSpread.Gain gain, in PenaltyRows.Step step, Vector256<double> y)
         {
             _slope += step.Two * _bend;
             _value += step.One * _slope;
@@ -225,7 +202,8 @@ internal sealed class PenalisedFit : IDisposable
             return surprise;
         }
 
-        public Vector256<double> Backwards(in Gain gain, in PenaltyRows.Step step, Vector256<double> surprise)
+        [MethodImpl(MethodImplOptions.AggressiveInlining)]
+        public Vector256<double> Backwards(in CurveSpread.Gain gain, in PenaltyRows.Step step, Vector256<double> surprise)
         {
             var noise = (gain.Sureness * surprise) - ((gain.Value * _value) + (gain.Slope * _slope) + (gain.Bend * _bend));
             _value += noise;
@@ -234,83 +212,7 @@ internal sealed class PenalisedFit : IDisposable
             return noise;
         }
 
-        public readonly Vector256<double> Seen(Share share) => (share.Value * _value) + (share.Slope * _slope) + (share.Bend * _bend);
-    }
-
-    /// <summary>Symmetric 3 x 3 matrix over value, slope and bend: how unsure they are, or on the way back what is known of them.</summary>
-    [StructLayout(LayoutKind.Auto)]
-    private struct Spread
-    {
-        private Vector256<double> _vv;
-        private Vector256<double> _vs;
-        private Vector256<double> _vb;
-        private Vector256<double> _ss;
-        private Vector256<double> _sb;
-        private Vector256<double> _bb;
-
-        public static Spread Of(Share[] from, int order)
-        {
-            var p = default(Spread);
-            for (var k = 0; k < order; k++)
-            {
-                var f = from[k];
-                p._vv += Vector256.Create(f.Value * f.Value);
-                p._vs += Vector256.Create(f.Value * f.Slope);
-                p._vb += Vector256.Create(f.Value * f.Bend);
-                p._ss += Vector256.Create(f.Slope * f.Slope);
-                p._sb += Vector256.Create(f.Slope * f.Bend);
-                p._bb += Vector256.Create(f.Bend * f.Bend);
-            }
-
-            return p;
-        }
-
-        public void Advance(in PenaltyRows.Step step, Vector256<double> push, int order)
-        {
-            _bb += order == 3 ? push : default;
-            _ss += step.Two * ((Two * _sb) + (step.Two * _bb));
-            _sb += step.Two * _bb;
-            _vs += step.Two * _vb;
-            _ss += order == 2 ? push : default;
-            _vv += step.One * ((Two * _vs) + (step.One * _ss));
-            _vs += step.One * _ss;
-            _vb += step.One * _sb;
-            _vv += order == 1 ? push : default;
-        }
-
-        public Gain Correct()
-        {
-            var sureness = Vector256<double>.One / (_vv + Vector256<double>.One);
-            var gain = new Gain(_vv * sureness, _vs * sureness, _vb * sureness, sureness);
-            _ss -= gain.Slope * _vs;
-            _sb -= gain.Slope * _vb;
-            _bb -= gain.Bend * _vb;
-            _vv = gain.Value;
-            _vs = gain.Slope;
-            _vb = gain.Bend;
-            return gain;
-        }
-
-        public Vector256<double> Retreat(in Gain gain, in PenaltyRows.Step step)
-        {
-            var v = (_vv * gain.Value) + (_vs * gain.Slope) + (_vb * gain.Bend);
-            var s = (_vs * gain.Value) + (_ss * gain.Slope) + (_sb * gain.Bend);
-            var b = (_vb * gain.Value) + (_sb * gain.Slope) + (_bb * gain.Bend);
-            var own = gain.Sureness + (gain.Value * v) + (gain.Slope * s) + (gain.Bend * b);
-            _vv += own - (Two * v);
-            _vs -= s;
-            _vb -= b;
-            _ss += step.One * ((Two * _vs) + (step.One * _vv));
-            _vs += step.One * _vv;
-            _sb += step.One * _vb;
-            _bb += step.Two * ((Two * _sb) + (step.Two * _ss));
-            _sb += step.Two * _ss;
-            _vb += step.Two * _vs;
-            return own;
-        }
-
-        public readonly Vector256<double> Seen(Share f) =>
-            (f.Value * f.Value * _vv) + (f.Slope * f.Slope * _ss) + (f.Bend * f.Bend * _bb)
-            + (2 * ((f.Value * f.Slope * _vs) + (f.Value * f.Bend * _vb) + (f.Slope * f.Bend * _sb)));
+        public readonly Vector256<double> Seen(PenaltyRows.Share share) =>
+            (share.Value * _value) + (share.Slope * _slope) + (share.Bend * _bend);
     }
 }

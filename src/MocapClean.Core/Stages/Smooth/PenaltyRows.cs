@@ -72,12 +72,39 @@ internal sealed class PenaltyRows
         return (bend - ((before - early) / _steps[i - 1].Two)) / Math.Sqrt(_steps[i].Push);
     }
 
+    /// <summary>Shares of the first samples of a stretch, as many as the order.</summary>
+    /// <param name="first">The sample after them.</param>
+    public Share[] Beginning(int first)
+    {
+        var shares = new Share[Order];
+        shares[^1].Value = 1;
+        if (Order >= 2)
+        {
+            var (one, two) = (_steps[first - 1].One, _steps[first - 1].Two);
+            shares[^1].Slope = 1 / one;
+            shares[^2].Slope = -1 / one;
+            if (Order == 3)
+            {
+                var before = _steps[first - 2].One;
+                shares[2].Bend = 1 / (one * two);
+                shares[1].Bend = -((1 / one) + (1 / before)) / two;
+                shares[0].Bend = 1 / (before * two);
+            }
+        }
+
+        return shares;
+    }
+
     /// <summary>The way from one sample to the next.</summary>
     /// <param name="One">Intervals since the sample before.</param>
     /// <param name="Two">Intervals since the one before that.</param>
     /// <param name="Push">Variance of the push on the highest divided difference at penalty 1; 0 where a stretch has just begun.</param>
     [StructLayout(LayoutKind.Auto)]
     public readonly record struct Step(double One, double Two, double Push);
+
+    /// <summary>What a sample among the first of a stretch adds to the value, slope and bend (divided differences) at the last of them.</summary>
+    [StructLayout(LayoutKind.Auto)]
+    public record struct Share(double Value, double Slope, double Bend);
 
     // The penalty is span / order x (order! x divided difference)^2, which on a regular clock is the plain difference squared.
     // The push moves the divided difference of one order less, by the divided difference times the span.

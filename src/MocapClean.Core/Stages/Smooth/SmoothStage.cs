@@ -50,6 +50,10 @@ public sealed class SmoothStage : IStage
             var curve = new JointCurve(track, take.Clock, stretches, take.TextRounding);
             track = Replace(track, curve, smoother.Smooth(curve), settings.LargestRadians, joint, rows);
         }
+        else
+        {
+            track = track with { Smoothing = new SmoothingMeasure(double.NaN, double.NaN) };
+        }
 
         rows.Sort((a, b) => (a.First, -a.Last).CompareTo((b.First, -b.Last)));
         return new JointResult(track, findings.AddRange(rows));

@@ -1,92 +1,112 @@
+using System.Buffers;
 using System.Runtime.Intrinsics;
 
 namespace MocapClean.Core.Stages.Smooth;
 
-/// <summary>A curve smoothed with one strength throughout, for a ladder of strengths: residuals and leverages of each.</summary>
-internal sealed class StrengthBank
+/// <summary>A curve smoothed with each of a ladder of strengths: residuals and leverages of each, four strengths side by side.</summary>
+internal sealed class StrengthBank : IDisposable
 {
-    /// <summary>A joint that turns to and fro slower than once in four seconds is at rest, as far as noise is concerned.</summary>
-    private const double LowestCutoff = 0.25;
+    /// <summary>Strengths that stand side by side in a vector.</summary>
+    public const int Lanes = 4;
 
-    /// <summary>Above this share of the rate nearly everything passes.</summary>
-    private const double HighestShare = 0.45;
-
-    /// <summary>
-    /// The cutoffs rise by a factor of e^(1/3), 1.4; finer ladders left the same error. A penalty goes with the sixth power of the cutoff.
-    /// </summary>
-    private const double LogStep = 2;
+    private readonly int _length;
+    private readonly Vector256<double>[][] _squared;
+    private readonly Vector256<double>[][] _leverage;
+    private readonly double[,] _totals;
 
     /// <summary>Smooths the curve with every strength.</summary>
-    public StrengthBank(JointCurve curve, PenaltyRows rows, PenalisedFit fit)
+    /// <param name="fit">A fit with the curve's rows.</param>
+    /// <param name="curve">Four components a sample.</param>
+    /// <param name="logLooseness">Logarithms of one over the strength, evenly rising, a multiple of four of them.</param>
+    /// <param name="local">Looseness of each row that these multiply; empty where it is 1.</param>
+    public StrengthBank(
+        PenalisedFit fit, ReadOnlySpan<Vector256<double>> curve, double[] logLooseness, ReadOnlySpan<double> local)
     {
-        Cutoffs = Ladder(curve.Rate);
-        LogLooseness = [.. Cutoffs.Select(f => 6 * Math.Log(2 * Math.Sin(Math.PI * f / curve.Rate)))];
-        Squared = new double[Cutoffs.Length][];
-        Leverage = new double[Cutoffs.Length][];
-        var squared = new Vector256<double>[rows.Length];
-        var leverage = new Vector256<double>[rows.Length];
-        for (var k = 0; k < Cutoffs.Length; k += Vector256<double>.Count)
+        _length = curve.Length;
+        LogLooseness = logLooseness;
+        _squared = new Vector256<double>[logLooseness.Length / Lanes][];
+        _leverage = new Vector256<double>[Groups][];
+        _totals = new double[logLooseness.Length, 5];
+        for (var g = 0; g < Groups; g++)
         {
-            fit.Factor(Vector256.Create(Looseness(k), Looseness(k + 1), Looseness(k + 2), Looseness(k + 3)), []);
-            fit.Leverage(leverage);
-            fit.SquaredResiduals(curve.Samples, squared);
-            for (var lane = 0; lane < Vector256<double>.Count && k + lane < Cutoffs.Length; lane++)
-            {
-                Squared[k + lane] = Lane(squared, lane);
-                Leverage[k + lane] = Lane(leverage, lane);
-            }
+            _squared[g] = ArrayPool<Vector256<double>>.Shared.Rent(_length);
+            _leverage[g] = ArrayPool<Vector256<double>>.Shared.Rent(_length);
+            Smooth(fit, curve, local, g);
         }
-
-        Best = LeastCrossValidation(curve.Length);
     }
 
-    /// <summary>Half-gain cutoffs in hertz, rising.</summary>
-    public double[] Cutoffs { get; }
-
-    /// <summary>Logarithm of one over the penalty, rising.</summary>
+    /// <summary>Logarithms of one over the strength, evenly rising.</summary>
     public double[] LogLooseness { get; }
 
-    /// <summary>Squared length of sample minus smoothed sample, of each strength.</summary>
-    public double[][] Squared { get; }
+    /// <summary>Number of vectors of strengths.</summary>
+    public int Groups => _squared.Length;
 
-    /// <summary>Leverage of each sample, of each strength.</summary>
-    public double[][] Leverage { get; }
+    /// <summary>Squared length of sample minus smoothed sample, for the strengths of a group.</summary>
+    public ReadOnlySpan<Vector256<double>> Squared(int group) => _squared[group].AsSpan(0, _length);
 
-    /// <summary>The strength with the least generalised cross-validation score (Craven and Wahba 1979).</summary>
-    public int Best { get; }
+    /// <summary>Leverage of each sample, for the strengths of a group.</summary>
+    public ReadOnlySpan<Vector256<double>> Leverage(int group) => _leverage[group].AsSpan(0, _length);
 
-    /// <summary>Logarithm of looseness with the least score, by the parabola through the best rung and its neighbours.</summary>
-    public double BestLogLooseness => LogLooseness[Best] + (LogStep * Parabola.Lowest(Scores, Best));
+    /// <summary>
+    /// The strength with the least generalised cross-validation score over all components (Craven and Wahba 1979), and its looseness by the
+    /// parabola through its neighbours.
+    /// </summary>
+    public (int Rung, double Looseness) LeastCrossValidation() =>
+        Least(k => Math.Log(Math.Max(Total(k, 0) + Total(k, 1) + Total(k, 2) + Total(k, 3), double.Epsilon))
+            - (2 * Math.Log(Math.Max(_length - Trace(k), double.Epsilon))));
 
-    private double[] Scores { get; set; } = [];
+    /// <summary>The looseness with the least estimated error of one component, given the noise: Mallows' criterion (1973).</summary>
+    public double LeastError(int component, double variance) =>
+        Least(k => Total(k, component) + (2 * LocalStrength.Caution * variance * Trace(k))).Looseness;
 
-    private static double[] Ladder(double rate)
+    /// <summary>Noise variance of an axis, in the curve's units, by what the strength of a rung took away.</summary>
+    public double NoiseVariance(int rung, double least)
     {
-        var count = Math.Max(4, 1 + (int)Math.Floor(6 / LogStep * Math.Log(HighestShare * rate / LowestCutoff)));
-        return [.. Enumerable.Range(0, count).Select(k => HighestShare * rate * Math.Exp((k - count + 1) * LogStep / 6))];
-    }
-
-    private static double[] Lane(Vector256<double>[] values, int lane)
-    {
-        var found = new double[values.Length];
-        for (var i = 0; i < found.Length; i++)
+        var (squared, leverage) = (new double[_length], new double[_length]);
+        for (var i = 0; i < _length; i++)
         {
-            found[i] = values[i][lane];
+            squared[i] = _squared[rung / Lanes][i][rung % Lanes];
+            leverage[i] = _leverage[rung / Lanes][i][rung % Lanes];
         }
 
-        return found;
+        return Noise.Variance(squared, leverage, least);
     }
 
-    private double Looseness(int k) => Math.Exp(LogLooseness[Math.Min(k, LogLooseness.Length - 1)]);
-
-    private int LeastCrossValidation(int n)
+    /// <inheritdoc/>
+    public void Dispose()
     {
-        Scores = new double[Cutoffs.Length];
-        for (var k = 0; k < Scores.Length; k++)
+        for (var g = 0; g < Groups; g++)
         {
-            Scores[k] = Math.Log(Math.Max(Squared[k].Sum(), double.Epsilon)) - (2 * Math.Log(n - Leverage[k].Sum()));
+            ArrayPool<Vector256<double>>.Shared.Return(_squared[g]);
+            ArrayPool<Vector256<double>>.Shared.Return(_leverage[g]);
+        }
+    }
+
+    private void Smooth(PenalisedFit fit, ReadOnlySpan<Vector256<double>> curve, ReadOnlySpan<double> local, int group)
+    {
+        Span<Vector256<double>> totals = stackalloc Vector256<double>[5];
+        fit.Factor(Vector256.Exp(Vector256.Create(LogLooseness, group * Lanes)), local);
+        fit.Leverage(_leverage[group]);
+        fit.SquaredResiduals(curve, _squared[group], totals[..4]);
+        foreach (var h in Leverage(group))
+        {
+            totals[4] += h;
         }
 
-        return Array.IndexOf(Scores, Scores.Min());
+        for (var n = 0; n < Lanes * 5; n++)
+        {
+            _totals[(group * Lanes) + (n / 5), n % 5] = totals[n % 5][n / 5];
+        }
+    }
+
+    private double Total(int rung, int component) => _totals[rung, component];
+
+    private double Trace(int rung) => _totals[rung, 4];
+
+    private (int Rung, double Looseness) Least(Func<int, double> score)
+    {
+        var scores = Enumerable.Range(0, LogLooseness.Length).Select(score).ToArray();
+        var best = Array.IndexOf(scores, scores.Min());
+        return (best, Math.Exp(LogLooseness[best] + ((LogLooseness[1] - LogLooseness[0]) * Parabola.Lowest(scores, best))));
     }
 }

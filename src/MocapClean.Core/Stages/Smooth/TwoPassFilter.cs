@@ -10,15 +10,28 @@ namespace MocapClean.Core.Stages.Smooth;
 internal sealed class TwoPassFilter
 {
     private readonly ButterworthDesign _design;
-    private readonly double[][] _ways;
+    private readonly Vector256<double>[] _effects;
+    private readonly Vector256<double>[] _misfits;
     private readonly Matrix<double> _solver;
 
     /// <summary>Prepares the ends for series of this length, at least 3.</summary>
     public TwoPassFilter(ButterworthDesign design, int length)
     {
         _design = design;
-        _ways = [.. Ways(0, length), .. Ways(1, length)];
-        _solver = Matrix<double>.Build.Dense(4, 4, (k, m) => Enumerable.Range(0, length).Sum(n => Misfit(k, n) * Misfit(m, n))).PseudoInverse();
+        _effects = new Vector256<double>[length];
+        _misfits = new Vector256<double>[length];
+        FollowStates();
+        Span<Vector256<double>> gram = stackalloc Vector256<double>[4];
+        foreach (var m in _misfits)
+        {
+            for (var k = 0; k < 4; k++)
+            {
+                gram[k] += m[k] * m;
+            }
+        }
+
+        var squares = gram.ToArray();
+        _solver = Matrix<double>.Build.Dense(4, 4, (k, j) => squares[k][j]).PseudoInverse();
     }
 
     /// <summary>Filters a series of this filter's length.</summary>
@@ -26,11 +39,11 @@ internal sealed class TwoPassFilter
     {
         var other = new Vector256<double>[x.Length];
         x.CopyTo(y);
+        Pass(y, default, default);
+        y.Reverse();
+        Pass(y, default, default);
+        y.Reverse();
         x.CopyTo(other);
-        Pass(y, default, default);
-        y.Reverse();
-        Pass(y, default, default);
-        y.Reverse();
         Array.Reverse(other);
         Pass(other, default, default);
         Array.Reverse(other);
@@ -38,7 +51,24 @@ internal sealed class TwoPassFilter
         AddEnds(other, y);
     }
 
-    private double Misfit(int k, int n) => _ways[2 * k][n] - _ways[(2 * k) + 1][n];
+    // A lane for each of four states that may differ from 0: the two at the start of the forward pass, the two at the start of the backward
+    // one. Their effect on the result when the forward pass comes first, and how much that differs from the effect when it comes last.
+    private void FollowStates()
+    {
+        var n = _effects.Length;
+        var last = new Vector256<double>[n];
+        Pass(last, Vector256.Create(1.0, 0, 0, 0), Vector256.Create(0, 1.0, 0, 0));
+        var first = last.Reverse().ToArray();
+        Pass(first, default, default);
+        Array.Reverse(first);
+        for (var i = 0; i < n; i++)
+        {
+            var (near, far) = (last[i], last[n - 1 - i]);
+            var (passed, passedFar) = (first[i], first[n - 1 - i]);
+            _effects[i] = Vector256.Create(passed[0], passed[1], far[0], far[1]);
+            _misfits[i] = _effects[i] - Vector256.Create(near[0], near[1], passedFar[0], passedFar[1]);
+        }
+    }
 
     // Least squares for the four states that bring the two orders of passes closest, added to the first order's result.
     private void AddEnds(ReadOnlySpan<Vector256<double>> other, Span<Vector256<double>> y)
@@ -46,34 +76,24 @@ internal sealed class TwoPassFilter
         Span<Vector256<double>> misfit = stackalloc Vector256<double>[4];
         for (var n = 0; n < y.Length; n++)
         {
+            var difference = other[n] - y[n];
             for (var k = 0; k < 4; k++)
             {
-                misfit[k] += Misfit(k, n) * (other[n] - y[n]);
+                misfit[k] += _misfits[n][k] * difference;
             }
         }
 
+        Span<Vector256<double>> states = stackalloc Vector256<double>[4];
         for (var k = 0; k < 4; k++)
         {
-            var state = (_solver[k, 0] * misfit[0]) + (_solver[k, 1] * misfit[1]) + (_solver[k, 2] * misfit[2]) + (_solver[k, 3] * misfit[3]);
-            for (var n = 0; n < y.Length; n++)
-            {
-                y[n] += _ways[2 * k][n] * state;
-            }
+            states[k] = (_solver[k, 0] * misfit[0]) + (_solver[k, 1] * misfit[1]) + (_solver[k, 2] * misfit[2]) + (_solver[k, 3] * misfit[3]);
         }
-    }
 
-    // What a unit of the k-th state at the start of the forward pass does to the result, when that pass is first and when it is last;
-    // and the same for the backward pass.
-    private double[][] Ways(int k, int length)
-    {
-        var alone = new Vector256<double>[length];
-        Pass(alone, Vector256.Create(k == 0 ? 1.0 : 0), Vector256.Create(k == 1 ? 1.0 : 0));
-        var last = alone.Select(v => v[0]).ToArray();
-        Array.Reverse(alone);
-        Pass(alone, default, default);
-        Array.Reverse(alone);
-        var first = alone.Select(v => v[0]).ToArray();
-        return [first, last, [.. last.Reverse()], [.. first.Reverse()]];
+        for (var n = 0; n < y.Length; n++)
+        {
+            var effect = _effects[n];
+            y[n] += (effect[0] * states[0]) + (effect[1] * states[1]) + (effect[2] * states[2]) + (effect[3] * states[3]);
+        }
     }
 
     private void Pass(Span<Vector256<double>> series, Vector256<double> one, Vector256<double> two)

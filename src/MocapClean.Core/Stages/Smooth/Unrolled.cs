@@ -42,20 +42,21 @@ internal sealed class Unrolled
     /// <param name="local">Looseness of each row.</param>
     public void AlignAxes(ReadOnlySpan<Vector256<double>> smoothed, PenaltyRows rows, ReadOnlySpan<double> local)
     {
-        var sum = new double[3, 3];
+        Vector256<double> byX = default, byY = default, byZ = default;
         for (var s = 0; s + 1 < rows.Starts.Length; s++)
         {
             for (var i = rows.Starts[s] + rows.Order; i < rows.Starts[s + 1]; i++)
             {
-                var d = rows.Difference(smoothed, i) / Math.Sqrt(local[i]);
-                for (var k = 0; k < 9; k++)
-                {
-                    sum[k / 3, k % 3] += d[k / 3] * d[k % 3];
-                }
+                var d = rows.Difference(smoothed, i);
+                var seen = d / local[i];
+                byX += seen * d[0];
+                byY += seen * d[1];
+                byZ += seen * d[2];
             }
         }
 
-        _axes = Matrix<double>.Build.DenseOfArray(sum).Evd(Symmetricity.Symmetric).EigenVectors;
+        var spread = Matrix<double>.Build.DenseOfArray(new[,] { { byX[0], byX[1], byX[2] }, { byY[0], byY[1], byY[2] }, { byZ[0], byZ[1], byZ[2] } });
+        _axes = spread.Evd(Symmetricity.Symmetric).EigenVectors;
         var (x, y, z) = (Axis(0), Axis(1), Axis(2));
         for (var i = 0; i < Values.Length; i++)
         {

@@ -17,10 +17,9 @@ internal sealed class WhittakerSmoother : ISmoother
     /// <inheritdoc/>
     public SmoothedCurve Smooth(JointCurve curve)
     {
-        var rows = new PenaltyRows(3, curve.Times, curve.Starts);
-        using var fit = new PenalisedFit(rows);
-        var bank = new StrengthBank(curve, rows, fit);
-        return With(curve, fit, Math.Exp(bank.BestLogLooseness));
+        using var fit = new PenalisedFit(new PenaltyRows(3, curve.Times, curve.Starts));
+        using var bank = new StrengthBank(fit, MemoryMarshal.Cast<Quat, Vector256<double>>(curve.Samples), StrengthLadder.Whole(curve.Rate), []);
+        return With(curve, fit, bank.LeastCrossValidation().Looseness);
     }
 
     /// <summary>The four components fitted with one strength.</summary>
