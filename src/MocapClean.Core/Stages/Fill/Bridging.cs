@@ -7,22 +7,32 @@ namespace MocapClean.Core.Stages.Fill;
 /// Builds bridges across the open runs of one track. Every method predicts the turns inside a run and shares out what is lacking to
 /// reach the other edge; the models of the motion, learned when first needed, say how far from the truth the result is likely to be.
 /// </summary>
-internal sealed class Bridging(JointTrack track, Clock clock, double textRounding, FillMethod method)
+internal sealed class Bridging
 {
-    private readonly Increments increments = new(track, clock);
-    private GaussianBridge? process;
-    private bool learned;
+    private readonly JointTrack track;
+    private readonly FillMethod method;
+    private readonly Increments increments;
+    private readonly MotionModels models;
+    private readonly GaussianBridge process;
+
+    public Bridging(JointTrack track, Clock clock, double textRounding, FillMethod method)
+    {
+        (this.track, this.method) = (track, method);
+        increments = new Increments(track, clock);
+        models = new MotionModels(increments, clock.Rate, textRounding);
+        process = new GaussianBridge(increments, models);
+    }
 
     /// <summary>The bridge across a run with two trusted edges, or null where the track has nothing to learn its motion from.</summary>
     public Bridge? Across(OpenRun run)
     {
-        if (Process() is not { } gaussian)
+        if (!models.CanLearn)
         {
             return null;
         }
 
         var (from, to) = (track.Samples[run.First - 1], track.Samples[run.Last + 1]);
-        var (turns, shares, squares) = gaussian.Across(run);
+        var (turns, shares, squares) = process.Across(run);
         var expected = ClosedPath.Close(from, to, turns, shares);
         if (method == FillMethod.GaussianProcess)
         {
@@ -44,22 +54,10 @@ internal sealed class Bridging(JointTrack track, Clock clock, double textRoundin
     private static Bridge Result(Quat[] path, double[] squares, Quat to) =>
         new(path[..^1], squares[..^1], Quat.Dot(path[^1], to) < 0);
 
-    private GaussianBridge? Process()
-    {
-        if (!learned)
-        {
-            var models = MotionModel.Learn(increments, clock.Rate, textRounding);
-            process = models.Length == 0 ? null : new GaussianBridge(increments, models);
-            learned = true;
-        }
-
-        return process;
-    }
-
     private (Vec3[] Turns, double[] Shares) ConstantTurns(OpenRun run)
     {
         var (first, count) = (run.First - 1, run.Count + 1);
         var elapsed = increments.Elapsed(first, count);
-        return (new Vec3[count], Array.ConvertAll(increments.Ticks[first..(first + count)], t => t / elapsed));
+        return (new Vec3[count], [.. Enumerable.Range(first, count).Select(i => increments.Tick(i) / elapsed)]);
     }
 }

@@ -1,3 +1,5 @@
+using System.Runtime.CompilerServices;
+
 namespace MocapClean.Core.Stages.Fill;
 
 /// <summary>
@@ -11,7 +13,10 @@ internal sealed class Cholesky
 
     private Cholesky(double[] rows, int size) => (this.rows, this.size) = (rows, size);
 
-    /// <summary>Factors a matrix given by its lower triangle, row-major, in place. A pivot that rounding made negative counts as tiny.</summary>
+    /// <summary>
+    /// Factors a matrix given by its lower triangle, row-major, in place. A pivot that rounding made negative counts as tiny.
+    /// </summary>
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
     public static Cholesky Factor(double[] matrix, int size)
     {
         for (var i = 0; i < size; i++)
@@ -31,6 +36,7 @@ internal sealed class Cholesky
     }
 
     /// <summary>Solves <c>L x = b</c> in place.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
     public void Forward(Span<double> b)
     {
         for (var i = 0; i < size; i++)

@@ -20,7 +20,7 @@ internal static class CubicTurns
         var past = 0.0;
         for (var g = 0; g < count; g++)
         {
-            var tick = increments.Ticks[first + g] / elapsed;
+            var tick = increments.Tick(first + g) / elapsed;
             var middle = past + (tick / 2);
             turns[g] = (tick * elapsed) * (((1 - middle) * left) + (middle * right));
             shares[g] = Parabola(past + tick) - Parabola(past);
@@ -33,7 +33,9 @@ internal static class CubicTurns
     /// <summary>The integral from 0 of 6 t (1 - t), which is 1 at 1.</summary>
     private static double Parabola(double t) => t * t * (3 - (2 * t));
 
-    /// <summary>Speed at the edge by the straight line through the two nearest increments; of one alone, its own; null without any.</summary>
+    /// <summary>
+    /// Speed at the edge by the straight line through the two nearest increments; of one alone, its own; null without any.
+    /// </summary>
     private static Vec3? EdgeSpeed(Increments increments, int near, int step)
     {
         if (!increments.IsKnown(near))
@@ -42,6 +44,6 @@ internal static class CubicTurns
         }
 
         var next = near + step;
-        return increments.IsKnown(next) ? (1.5 * increments.Turns[near]) - (0.5 * increments.Turns[next]) : increments.Turns[near];
+        return increments.IsKnown(next) ? (1.5 * increments.Turn(near)) - (0.5 * increments.Turn(next)) : increments.Turn(near);
     }
 }

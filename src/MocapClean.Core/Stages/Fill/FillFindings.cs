@@ -10,7 +10,8 @@ internal static class FillFindings
     /// <summary>
     /// Gaps, spikes and freezes within a run become filled, left or flagged; missing samples that no gap row tells of get one.
     /// </summary>
-    public static ImmutableArray<Finding> Settle(int joint, JointTrack before, ImmutableArray<Finding> findings, ImmutableArray<SettledRun> runs)
+    public static ImmutableArray<Finding> Settle(
+        int joint, JointTrack before, ImmutableArray<Finding> findings, ImmutableArray<SettledRun> runs)
     {
         var all = findings.ToList();
         foreach (var settled in runs)
@@ -65,7 +66,7 @@ internal static class FillFindings
 
     /// <summary>The turn from edge to edge; NaN at the ends of a track.</summary>
     private static double Width(JointTrack track, OpenRun run) =>
-        run.First > 0 && run.Last < track.Length - 1 && track.Samples[run.First - 1].IsOrientation && track.Samples[run.Last + 1].IsOrientation
-            ? Angle.Between(track.Samples[run.First - 1], track.Samples[run.Last + 1])
-            : double.NaN;
+        run.First == 0 || run.Last == track.Length - 1
+            ? double.NaN
+            : Angle.Between(track.Samples[run.First - 1], track.Samples[run.Last + 1]);
 }

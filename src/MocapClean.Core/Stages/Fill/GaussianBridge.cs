@@ -6,16 +6,18 @@ namespace MocapClean.Core.Stages.Fill;
 /// Bridges by Gaussian-process regression on the angular velocity. Several models of the motion are asked and weighted by how well
 /// each explains the neighbourhood (Rasmussen and Williams 2006, section 5.2).
 /// </summary>
-internal sealed class GaussianBridge(Increments increments, MotionModel[] models)
+internal sealed class GaussianBridge(Increments increments, MotionModels learned)
 {
-    // Known increments on either side that are asked: at 100 to 150 Hz, the nearest half second. More is slower and no better.
-    private const int Neighbours = 60;
+    // How much of the evidence is believed. No model is true of a living joint, yet with sixty neighbours of three axes the least wrong
+    // one would silence all others; at a tenth each still has its say (tempering: Grunwald and van Ommen 2017).
+    private const double Belief = 0.1;
 
     /// <summary>Expected turns, shares of the closing error and expected squared errors of the intervals of a run.</summary>
     public (Vec3[] Turns, double[] Shares, double[] SquaredErrors) Across(OpenRun run)
     {
         var (first, count) = (run.First - 1, run.Count + 1);
-        var beside = increments.Beside(first, count, Neighbours);
+        var (models, neighbours) = learned.About(first, count);
+        var beside = increments.Beside(first, count, neighbours);
         var posteriors = Array.ConvertAll(models, m => new Posterior(m, increments, beside, first, count));
         var weights = Weights(posteriors);
         var (turns, shares) = (new Vec3[count], new double[count]);
@@ -35,7 +37,7 @@ internal sealed class GaussianBridge(Increments increments, MotionModel[] models
     {
         var evidence = Array.ConvertAll(posteriors, p => p.Evidence);
         var top = evidence.Max();
-        var weights = Array.ConvertAll(evidence, e => Math.Exp(e - top));
+        var weights = Array.ConvertAll(evidence, e => Math.Exp(Belief * (e - top)));
         var sum = weights.Sum();
         return Array.ConvertAll(weights, w => w / sum);
     }

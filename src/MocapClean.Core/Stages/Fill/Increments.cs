@@ -16,14 +16,18 @@ internal sealed class Increments
     // How far away a neighbour may be, in multiples of the number asked for: past that, gaps make up most of the neighbourhood.
     private const int Reach = 4;
 
-    private readonly double[] middles;
+    private readonly JointTrack track;
+    private readonly Clock clock;
+    private readonly Vec3[] turns;
+    private readonly bool[] measured;
     private readonly bool[] breaks;
 
-    /// <summary>Differences a track on its clock.</summary>
+    /// <summary>Looks at which turns of a track are known; they are measured where they are asked for.</summary>
     public Increments(JointTrack track, Clock clock)
     {
         var count = Math.Max(0, track.Length - 1);
-        (Turns, Known, Ticks, middles, breaks) = (new Vec3[count], new bool[count], new double[count], new double[count], new bool[count]);
+        (this.track, this.clock) = (track, clock);
+        (turns, measured, breaks, Known) = (new Vec3[count], new bool[count], new bool[count], new bool[count]);
         foreach (var b in track.Breaks)
         {
             if (b > 0 && b <= count)
@@ -34,36 +38,51 @@ internal sealed class Increments
 
         for (var i = 0; i < count; i++)
         {
-            // On a regular clock both are whole, so that equal lags are equal numbers.
-            Ticks[i] = clock.IsRegular ? 1 : (clock.Steady[i + 1] - clock.Steady[i]) * clock.Rate;
-            middles[i] = clock.IsRegular ? i : (clock.Steady[i + 1] + clock.Steady[i]) / 2 * clock.Rate;
             Known[i] = !breaks[i] && OpenRun.IsTrusted(track.States[i]) && OpenRun.IsTrusted(track.States[i + 1]);
-            Turns[i] = Known[i] ? (1 / Ticks[i]) * RotationVector.From(track.Samples[i], track.Samples[i + 1]) : Vec3.Zero;
         }
     }
-
-    /// <summary>Turns in radians a nominal interval; zero where not known.</summary>
-    public Vec3[] Turns { get; }
 
     /// <summary>Which turns are known.</summary>
     public bool[] Known { get; }
 
-    /// <summary>Length of each interval in nominal intervals; 1 throughout on a regular clock.</summary>
-    public double[] Ticks { get; }
+    /// <summary>Length of an interval in nominal intervals; exactly 1 on a regular clock.</summary>
+    public double Tick(int i) => clock.IsRegular ? 1 : (clock.Steady[i + 1] - clock.Steady[i]) * clock.Rate;
 
-    /// <summary>Middle of an interval, in nominal intervals from any origin.</summary>
-    public double At(int i) => middles[i];
+    /// <summary>
+    /// Middle of an interval, in nominal intervals from any origin; whole on a regular clock, so that equal lags are equal numbers.
+    /// </summary>
+    public double At(int i) => clock.IsRegular ? i : (clock.Steady[i + 1] + clock.Steady[i]) / 2 * clock.Rate;
+
+    /// <summary>A turn in radians a nominal interval; zero where not known.</summary>
+    public Vec3 Turn(int i) => Turns(i, i + 1)[0];
+
+    /// <summary>The turns from one interval up to, not including, another.</summary>
+    public ReadOnlySpan<Vec3> Turns(int from, int to)
+    {
+        for (var i = from; i < to; i++)
+        {
+            if (Known[i] && !measured[i])
+            {
+                (turns[i], measured[i]) = ((1 / Tick(i)) * RotationVector.From(track.Samples[i], track.Samples[i + 1]), true);
+            }
+        }
+
+        return turns.AsSpan(from, to - from);
+    }
 
     /// <summary>The interval exists and its turn is known.</summary>
     public bool IsKnown(int i) => i >= 0 && i < Known.Length && Known[i];
+
+    /// <summary>How many turns are known from one interval up to, not including, another.</summary>
+    public int CountKnown(int from, int to) => Known.AsSpan(from, to - from).Count(value: true);
 
     /// <summary>Length of a row of intervals in nominal intervals.</summary>
     public double Elapsed(int first, int count)
     {
         var sum = 0.0;
-        foreach (var t in Ticks.AsSpan(first, count))
+        for (var i = first; i < first + count; i++)
         {
-            sum += t;
+            sum += Tick(i);
         }
 
         return sum;

@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using System.Runtime.InteropServices;
 using MocapClean.Core.Orientation;
 using MocapClean.Core.Takes;
 
@@ -29,26 +30,32 @@ internal sealed class JointFill(JointTrack track, Clock clock, double textRoundi
             }
         }
 
-        return track with { Samples = [.. samples], States = [.. states] };
+        return track with
+        {
+            Samples = ImmutableCollectionsMarshal.AsImmutableArray(samples),
+            States = ImmutableCollectionsMarshal.AsImmutableArray(states),
+        };
     }
 
     private SettledRun Decide(OpenRun run)
     {
         if (Refusal(run) is { Length: > 0 } refusal)
         {
-            return new SettledRun(run, Bridge: null, refusal);
+            return Refused(run, refusal);
         }
 
         if (bridging.Across(run) is not { } bridge)
         {
-            return new SettledRun(run, Bridge: null, "no motion beside it to learn from");
+            return Refused(run, "no motion beside it to learn from");
         }
 
         var error = bridge.ExpectedError(0, run.Count);
         return error <= settings.Worst
             ? new SettledRun(run, bridge, "")
-            : new SettledRun(run, Bridge: null, $"too uncertain, {Degrees(error)} expected error where {Degrees(settings.Worst)} is allowed");
+            : Refused(run, $"too uncertain, {Degrees(error)} expected error where {Degrees(settings.Worst)} is allowed");
     }
+
+    private static SettledRun Refused(OpenRun run, string why) => new(run, Bridge: null, why);
 
     private string Refusal(OpenRun run)
     {
@@ -63,7 +70,8 @@ internal sealed class JointFill(JointTrack track, Clock clock, double textRoundi
         }
 
         // Frames where frames were asked for; time by the clock, of which a regular one gives the same.
-        var frames = settings.Longest.InFrames ? run.Count : ((clock.Steady[run.Last + 1] - clock.Steady[run.First - 1]) * clock.Rate) - 1;
+        var elapsed = clock.Steady[run.Last + 1] - clock.Steady[run.First - 1];
+        var frames = settings.Longest.InFrames ? run.Count : (elapsed * clock.Rate) - 1;
         var allowed = settings.Longest.ToFrames(clock.Rate);
         if (frames > allowed + 1e-6)
         {

@@ -1,4 +1,5 @@
 using System.Numerics;
+using System.Runtime.CompilerServices;
 using System.Runtime.InteropServices;
 using MocapClean.Core.Orientation;
 
@@ -11,6 +12,7 @@ internal static class LagProducts
     /// The autocovariance of weighted vectors, per axis: <c>sum w[i] w[i+l] v[i].v[i+l] / (3 sum w[i] w[i+l])</c> for lags 0 to
     /// <paramref name="longest"/>; 0 where no pair has weight. Summed directly: at some hundred lags as quick as a transform.
     /// </summary>
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
     public static double[] Autocovariance(ReadOnlySpan<Vec3> vectors, ReadOnlySpan<double> weights, int longest)
     {
         var count = vectors.Length;
@@ -32,6 +34,7 @@ internal static class LagProducts
     }
 
     /// <summary>Inner product of two spans of equal length, several numbers at a time.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
     public static double Dot(ReadOnlySpan<double> a, ReadOnlySpan<double> b)
     {
         var wide = MemoryMarshal.Cast<double, Vector<double>>(a);

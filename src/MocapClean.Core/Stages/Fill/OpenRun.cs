@@ -45,7 +45,9 @@ internal readonly record struct OpenRun(int First, int Last, string Obstacle)
     {
         if (first == 0 || last == track.Length - 1)
         {
-            return first > 0 ? "at the end of the track" : last < track.Length - 1 ? "at the start of the track" : "nothing in the track is trusted";
+            return first > 0 ? "at the end of the track"
+                : last < track.Length - 1 ? "at the start of the track"
+                : "nothing in the track is trusted";
         }
 
         if (!IsTrusted(track.States[first - 1]) || !IsTrusted(track.States[last + 1]))

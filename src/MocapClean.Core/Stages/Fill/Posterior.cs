@@ -1,3 +1,4 @@
+using System.Runtime.CompilerServices;
 using MocapClean.Core.Orientation;
 
 namespace MocapClean.Core.Stages.Fill;
@@ -26,9 +27,9 @@ internal sealed class Posterior
     {
         (this.model, this.increments, this.beside, this.first) = (model, increments, beside, first);
         factor = Cholesky.Factor(OwnCovariance(), beside.Length);
-        x = Array.ConvertAll(beside, i => increments.Turns[i].X);
-        y = Array.ConvertAll(beside, i => increments.Turns[i].Y);
-        z = Array.ConvertAll(beside, i => increments.Turns[i].Z);
+        x = Array.ConvertAll(beside, i => increments.Turn(i).X);
+        y = Array.ConvertAll(beside, i => increments.Turn(i).Y);
+        z = Array.ConvertAll(beside, i => increments.Turn(i).Z);
         factor.Forward(x);
         factor.Forward(y);
         factor.Forward(z);
@@ -55,6 +56,7 @@ internal sealed class Posterior
     /// <summary>Logarithm of the evidence for the model, its liveliness being unknown, up to a constant.</summary>
     public double Evidence => (-1.5 * factor.LogDeterminant()) - (1.5 * beside.Length * Math.Log(squares + 1e-9));
 
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
     private double[] OwnCovariance()
     {
         var size = beside.Length;
@@ -105,7 +107,7 @@ internal sealed class Posterior
 
         for (var g = 0; g < count; g++)
         {
-            Shares[g] = share > 0.5 ? Shares[g] / share : increments.Ticks[first + g] / increments.Elapsed(first, count);
+            Shares[g] = share > 0.5 ? Shares[g] / share : increments.Tick(first + g) / increments.Elapsed(first, count);
         }
     }
 
@@ -114,7 +116,7 @@ internal sealed class Posterior
     {
         for (var i = 0; i < row.Length; i++)
         {
-            row[i] = increments.Ticks[interval] * model.Covariance[increments.At(interval) - increments.At(beside[i])];
+            row[i] = increments.Tick(interval) * model.Covariance[increments.At(interval) - increments.At(beside[i])];
         }
 
         factor.Forward(row);
@@ -126,7 +128,7 @@ internal sealed class Posterior
         var (all, added) = (0.0, 0.0);
         for (var h = 0; h < Turns.Length; h++)
         {
-            var c = increments.Ticks[first + g] * increments.Ticks[first + h]
+            var c = increments.Tick(first + g) * increments.Tick(first + h)
                 * model.Covariance[increments.At(first + g) - increments.At(first + h)];
             all += c;
             added += h < g ? 2 * c : h == g ? c : 0;

@@ -24,7 +24,9 @@ internal static class SignSettlement
         return new JointResult(track with { Samples = [.. samples] }, Rows(joint, track, findings, negate));
     }
 
-    /// <summary>Which samples change sign: those after an odd number of turning bridges, or all others where that leaves more as delivered.</summary>
+    /// <summary>
+    /// Which samples change sign: those after an odd number of turning bridges, or all others where that leaves more as delivered.
+    /// </summary>
     private static bool[] Negated(JointTrack track, int[] turning)
     {
         var negate = new bool[track.Length];
@@ -37,11 +39,13 @@ internal static class SignSettlement
             }
 
             negate[n] = flip;
-            balance += track.States[n] is SampleState.Missing or SampleState.Filled ? 0 : IsFlipped(track, n) != flip ? 1 : -1;
+            balance += !WasDelivered(track, n) ? 0 : IsFlipped(track, n) != flip ? 1 : -1;
         }
 
         return balance > 0 ? Array.ConvertAll(negate, n => !n) : negate;
     }
+
+    private static bool WasDelivered(JointTrack track, int n) => track.States[n] is not (SampleState.Missing or SampleState.Filled);
 
     private static bool IsFlipped(JointTrack track, int n) => Quat.Dot(track.Samples[n], track.Delivered[n]) < 0;
 
@@ -52,14 +56,15 @@ internal static class SignSettlement
         for (var n = 0; n < negate.Length; n++)
         {
             var first = n;
-            while (n < negate.Length && track.States[n] is not (SampleState.Missing or SampleState.Filled) && IsFlipped(track, n) != negate[n])
+            while (n < negate.Length && WasDelivered(track, n) && IsFlipped(track, n) != negate[n])
             {
                 n++;
             }
 
             if (n > first)
             {
-                rows.Add(new Finding { Joint = joint, First = first, Last = n - 1, Kind = FaultKind.SignFlip, Action = FaultAction.Flipped });
+                var (kind, action) = (FaultKind.SignFlip, FaultAction.Flipped);
+                rows.Add(new Finding { Joint = joint, First = first, Last = n - 1, Kind = kind, Action = action });
             }
         }
 
