@@ -51,6 +51,7 @@ internal static class JointOutliers
         var shortest = Math.Max(ShortestFreeze, outliers.Freeze.WholeFrames(path.Rate));
         foreach (var (first, last, turn) in new FreezeSearch(path, shortest, jumps.Noise).Run())
         {
+            jumps.Refresh(first, last);
             marks.Reject(rhythm.FrameOf(first), LastFrame(last), FaultKind.Freeze, turn, spreads: null);
         }
 
@@ -58,6 +59,11 @@ internal static class JointOutliers
         foreach (var spike in stories.OfType<Story.Spike>())
         {
             marks.Reject(rhythm.FrameOf(spike.First), LastFrame(spike.Last), FaultKind.Spike, spike.Size, spike.Spreads);
+        }
+
+        foreach (var (first, last, size) in jumps.Unexplained())
+        {
+            marks.Flag(rhythm.FrameOf(first), LastFrame(last), size);
         }
 
         var steps = stories.OfType<Story.Step>().ToList();

@@ -13,6 +13,12 @@ internal sealed class JumpSearch(MotionPath path, double threshold, int longestS
     /// <summary>Striking samples no farther apart than this belong to one place: what one jump stirs up at the widest stride.</summary>
     private const int Together = 8;
 
+    /// <summary>
+    /// Change of speed within one sample that no body part and no prop survives, radians per second: 6000 degrees, twice that of a fist
+    /// that is stopped dead. A kink in a path lies a third of its change of speed from the cubic through its neighbours.
+    /// </summary>
+    private const double HardestBlow = 6000 * Math.PI / 180;
+
     /// <summary>Samples between two spikes that could as well belong to them.</summary>
     private const int Unvouched = 2;
 
@@ -21,6 +27,9 @@ internal sealed class JumpSearch(MotionPath path, double threshold, int longestS
 
     /// <summary>Robust spread of the length of one sample's noise, radians.</summary>
     public double Noise => screen.Noise;
+
+    /// <summary>Looks again where samples have lost their trust or a cut has come.</summary>
+    public void Refresh(int first, int last) => screen.Refresh(first - Together, last + Together);
 
     /// <summary>All stories, in order of frames.</summary>
     public List<Story> Run()
@@ -34,6 +43,11 @@ internal sealed class JumpSearch(MotionPath path, double threshold, int longestS
         stories.Sort((a, b) => a.First.CompareTo(b.First));
         return Joined(stories);
     }
+
+    /// <summary>
+    /// After the search: runs that jump about beyond what the hardest blow does, with too little healthy motion between to tell a story by.
+    /// </summary>
+    public List<(int First, int Last, double Size)> Unexplained() => screen.Wild(Together, HardestBlow / path.Rate / 3);
 
     private void Explain((int First, int Last) place, List<Story> stories)
     {
@@ -59,7 +73,7 @@ internal sealed class JumpSearch(MotionPath path, double threshold, int longestS
             path.Cut[story.First] = true;
         }
 
-        screen.Refresh(story.First - Together, last + Together);
+        Refresh(story.First, last);
     }
 
     /// <summary>

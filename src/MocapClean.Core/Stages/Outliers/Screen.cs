@@ -111,6 +111,35 @@ internal sealed class Screen
         return found;
     }
 
+    /// <summary>
+    /// Runs of samples that lie farther from the cubic through their neighbours than any motion takes them, no farther apart than this.
+    /// </summary>
+    /// <param name="together">Samples no farther apart than this are one run.</param>
+    /// <param name="beyond">Radians that no motion can explain.</param>
+    public List<(int First, int Last, double Size)> Wild(int together, double beyond)
+    {
+        var found = new List<(int First, int Last, double Size)>();
+        for (var n = 0; n < path.Length; n++)
+        {
+            var size = innovations[0][n];
+            if (!(size > beyond))
+            {
+                continue;
+            }
+
+            if (found.Count > 0 && n - found[^1].Last <= together)
+            {
+                found[^1] = (found[^1].First, n, Math.Max(size, found[^1].Size));
+            }
+            else
+            {
+                found.Add((n, n, size));
+            }
+        }
+
+        return found;
+    }
+
     /// <summary>How far a sample is beyond what goes unnoticed, as a factor.</summary>
     private double Strength(int n)
     {

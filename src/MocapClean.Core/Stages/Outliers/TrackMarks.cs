@@ -66,6 +66,20 @@ internal sealed class TrackMarks(int joint, JointTrack track)
         }
     }
 
+    /// <summary>A run that jumps about and has no story: kept as delivered, and nothing goes across it.</summary>
+    public void Flag(int first, int last, double size)
+    {
+        foreach (var (from, to) in Runs(first, last, SampleState.Good).ToList())
+        {
+            states.AsSpan(from, to - from + 1).Fill(SampleState.Flagged);
+            findings.Add(Row(from, to, FaultKind.Spike, FaultAction.Flagged) with
+            {
+                SizeRadians = size,
+                Note = "jumps with too little motion between them to tell what happened",
+            });
+        }
+    }
+
     /// <summary>From this frame on all is turned, and no way back is known: kept, and nothing goes across it.</summary>
     public void Step(int frame, Story.Step step)
     {

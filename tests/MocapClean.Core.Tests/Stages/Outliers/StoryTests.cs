@@ -230,6 +230,24 @@ public sealed class StoryTests
     }
 
     [Fact]
+    public void A_stretch_of_garbage_is_flagged_and_kept()
+    {
+        var samples = Healthy();
+        for (var n = 300; n < 900; n++)
+        {
+            samples[n] = n % 5 == 0 || n % 7 == 0 ? Motion.Turn(n % 11, n % 3, 1, 30 + ((n * 37) % 150)) * samples[n] : samples[n];
+        }
+
+        var take = Search.Run(Rate, samples);
+        var rows = take.Findings.Where(f => f.Kind != FaultKind.SignFlip).OrderBy(f => f.First).ToList();
+        Assert.All(rows, f => Assert.Equal(FaultKind.Spike, f.Kind));
+        Assert.InRange(rows.Where(f => f.Action == FaultAction.Flagged).Sum(f => f.Count), 500, 620);
+        Assert.All(rows.Zip(rows.Skip(1)), p => Assert.True(p.First.Last < p.Second.First));
+        Assert.All(Enumerable.Range(0, samples.Length), n => Assert.Equal(
+            0, Angle.Between(samples[n], take.Tracks[0].Samples[n]), 1e-12));
+    }
+
+    [Fact]
     public void Bad_samples_beside_a_gap_are_found()
     {
         var samples = Healthy();
