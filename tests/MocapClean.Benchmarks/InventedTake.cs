@@ -57,8 +57,9 @@ internal static class InventedTake
     {
         // A pause in every ten seconds: the swing fades out and in.
         var awake = Math.Clamp(4 * Math.Sin(2 * Math.PI * t / 10), 0, 1);
-        return (0.6 * Math.Sin((2 * Math.PI * 0.3 * t) + phases[at])) +
-            (awake * ((0.3 * Math.Sin((2 * Math.PI * 0.9 * t) + phases[at + 1])) + (0.1 * Math.Sin((2 * Math.PI * 2.3 * t) + phases[at + 2]))));
+        var slow = 0.6 * Math.Sin((2 * Math.PI * 0.3 * t) + phases[at]);
+        var quick = (0.3 * Math.Sin((2 * Math.PI * 0.9 * t) + phases[at + 1])) + (0.1 * Math.Sin((2 * Math.PI * 2.3 * t) + phases[at + 2]));
+        return slow + (awake * quick);
     }
 
     private static Vec3 Noise(Random random) => new(Normal(random), Normal(random), Normal(random));

@@ -9,7 +9,8 @@ namespace MocapClean.Core.Stages.Reduce;
 public readonly record struct PlaybackError(double LargestRadians, double RmsRadians, int LargestFrame);
 
 /// <summary>
-/// Plays keys back as the receiving software will, from the key values alone: what the search promises is measured with this. Sources: Shoemake 1985 (slerp); glTF 2.0 specification, appendix C.
+/// Plays keys back as the receiving software will, from the key values alone: what the search promises is measured with this.
+/// Sources: Shoemake 1985 (slerp); glTF 2.0 specification, appendix C.
 /// </summary>
 public static class KeyPlayback
 {

@@ -167,7 +167,8 @@ internal sealed class KeySearch<TCurve> : IDisposable
         var isOpen = Put(a, b, c, d);
         for (; isOpen && d < last; step *= 2)
         {
-            (a, b, c, d) = (Math.Min(last, d + step), Math.Min(last, d + (2 * step)), Math.Min(last, d + (3 * step)), Math.Min(last, d + (4 * step)));
+            (a, b) = (Math.Min(last, d + step), Math.Min(last, d + (2 * step)));
+            (c, d) = (Math.Min(last, d + (3 * step)), Math.Min(last, d + (4 * step)));
             isOpen = Put(a, b, c, d);
         }
 

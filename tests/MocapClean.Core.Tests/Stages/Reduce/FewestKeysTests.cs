@@ -41,7 +41,8 @@ public sealed class FewestKeysTests
             var times = Motions.Times(frames, seed, seed % 2 == 0);
             foreach (var degrees in new[] { 0.2, 1, 5 })
             {
-                var limits = new SpanLimits(Angle.FromDegrees(degrees), Angle.FromDegrees(seed % 4 == 0 ? 20 : 90), seed % 5 == 0 ? 0.2 : 10);
+                var limits = new SpanLimits(
+                    Angle.FromDegrees(degrees), Angle.FromDegrees(seed % 4 == 0 ? 20 : 90), seed % 5 == 0 ? 0.2 : 10);
                 var keys = Keys(rule, samples, times, limits);
                 Assert.Equal(new EveryPair(rule, samples, times).Fewest(limits), keys.Length);
                 Assert.InRange(Measured(rule, keys, samples, times), 0, limits.Tolerance);

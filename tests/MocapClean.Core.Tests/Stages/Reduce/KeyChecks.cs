@@ -7,7 +7,14 @@ namespace MocapClean.Core.Tests.Stages.Reduce;
 
 /// <summary>A case of the fixtures in Data/Reduce: fewest keys found outside this project by trying all subsets or all pairs.</summary>
 internal sealed record KeyCheck(
-    Playback Playback, double Tolerance, double Widest, ImmutableArray<int> Pinned, int Fewest, int? Greedy, ImmutableArray<int>? OnlySet, double? ItsError);
+    Playback Playback,
+    double Tolerance,
+    double Widest,
+    ImmutableArray<int> Pinned,
+    int Fewest,
+    int? Greedy,
+    ImmutableArray<int>? OnlySet,
+    double? ItsError);
 
 internal sealed record CheckedTrack(string Name, Quat[] Samples, double[] Times, ImmutableArray<KeyCheck> Cases);
 
@@ -23,9 +30,11 @@ internal static class KeyChecks
 
     private static CheckedTrack Track(JsonElement e) => new(
         e.GetProperty("track").GetString()!,
-        Continuous([.. e.GetProperty("quaternions").EnumerateArray().Select(q => new Quat(q[0].GetDouble(), q[1].GetDouble(), q[2].GetDouble(), q[3].GetDouble()))]),
+        Continuous([.. e.GetProperty("quaternions").EnumerateArray().Select(Sample)]),
         [.. e.GetProperty("times").EnumerateArray().Select(t => t.GetDouble())],
         [.. e.GetProperty("cases").EnumerateArray().Select(Case)]);
+
+    private static Quat Sample(JsonElement q) => new(q[0].GetDouble(), q[1].GetDouble(), q[2].GetDouble(), q[3].GetDouble());
 
     private static KeyCheck Case(JsonElement e)
     {
