@@ -13,14 +13,15 @@ internal sealed class MotionModels(Increments increments, double rate, double te
     private const double ShortLagSeconds = 0.7;
     private const double LongLagSeconds = 2.8;
 
-    // Neighbours on either side that are asked: half of the shorter lag at 100 Hz for short runs, twice as many for long ones.
+    // Neighbours on either side that are asked: at 100 to 150 Hz about a quarter of a second for short runs, twice that for long ones
+    // would do no better than this.
     private const int FewNeighbours = 30;
-    private const int ManyNeighbours = 60;
+    private const int ManyNeighbours = 50;
 
-    // Half the width of the neighbourhood that is learned from: long enough for a dozen swings, short enough to tell rest from action.
-    private const double NeighbourhoodSeconds = 4;
+    // Half the width of the neighbourhood that is learned from: long enough for some swings, short enough to tell rest from action.
+    private const double NeighbourhoodSeconds = 3;
 
-    // Known increments that a neighbourhood must hold; it is widened until it does. Four for each neighbour that is asked.
+    // Known increments that a neighbourhood must hold; it is widened until it does. Four times the neighbours of a short run.
     private const int FewestKnown = 8 * FewNeighbours;
 
     // Memory and time grow with the lags; only rates above 1400 Hz are cut short by it.
