@@ -23,6 +23,6 @@ internal static class Noise
             scaled[i] = squared[i] / Math.Max(1 - leverage[i], 1e-12);
         }
 
-        return Math.Max(ArrayStatistics.MedianInplace(scaled) / MedianOfThree, finest * finest / 4);
+        return Math.Max(ArrayStatistics.MedianInplace(scaled) / MedianOfThree, Math.Max(finest * finest / 4, 1e-300));
     }
 }

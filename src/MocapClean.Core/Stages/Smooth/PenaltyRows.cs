@@ -52,24 +52,14 @@ internal sealed class PenaltyRows
     /// <summary>The step that leads to each sample.</summary>
     public ReadOnlySpan<Step> Steps => _steps;
 
-    /// <summary>The divided difference that ends at a sample, scaled as the penalty squares it: on a regular clock the plain difference.</summary>
-    public Vector256<double> Difference(ReadOnlySpan<Vector256<double>> z, int i)
+    /// <summary>The third difference that ends at a sample, scaled as the penalty squares it: on a regular clock the plain one.</summary>
+    public Vector256<double> ThirdDifference(ReadOnlySpan<Vector256<double>> z, int i)
     {
-        var slope = (z[i] - z[i - 1]) / _steps[i].One;
-        if (Order == 1)
-        {
-            return slope / Math.Sqrt(_steps[i].Push) * _steps[i].One;
-        }
-
-        var before = (z[i - 1] - z[i - 2]) / _steps[i - 1].One;
-        if (Order == 2)
-        {
-            return (slope - before) / Math.Sqrt(_steps[i].Push);
-        }
-
+        var late = (z[i] - z[i - 1]) / _steps[i].One;
+        var middle = (z[i - 1] - z[i - 2]) / _steps[i - 1].One;
         var early = (z[i - 2] - z[i - 3]) / _steps[i - 2].One;
-        var bend = (slope - before) / _steps[i].Two;
-        return (bend - ((before - early) / _steps[i - 1].Two)) / Math.Sqrt(_steps[i].Push);
+        var change = ((late - middle) / _steps[i].Two) - ((middle - early) / _steps[i - 1].Two);
+        return change / Math.Sqrt(_steps[i].Push);
     }
 
     /// <summary>Shares of the first samples of a stretch, as many as the order.</summary>

@@ -91,29 +91,27 @@ public sealed class SmoothStage : IStage
         var squared = new double[curve.Length];
         for (var s = 0; s < curve.Stretches.Count; s++)
         {
-            var (stretch, size, tooFast) = (curve.Stretches[s], 0.0, -1);
-            for (var i = curve.Starts[s]; i < curve.Starts[s + 1]; i++)
+            var stretch = curve.Stretches[s];
+            var (size, from) = (0.0, curve.Starts[s]);
+            var tooFast = new List<int>();
+            for (var i = from; i < curve.Starts[s + 1]; i++)
             {
-                var frame = stretch.First + i - curve.Starts[s];
                 squared[i] = (smoothed.Samples[i] + (-curve.Samples[i])).NormSquared;
-                var follows = smoothed.Samples[i].Norm >= LeastLength;
-                tooFast = follows ? tooFast : tooFast < 0 ? frame : tooFast;
-                if (tooFast >= 0 && (follows || frame == stretch.Last))
+                var frame = stretch.First + i - from;
+                if (smoothed.Samples[i].Norm < LeastLength)
                 {
-                    rows.Add(TooFast(joint, new Segment(tooFast, follows ? frame - 1 : frame)));
-                    tooFast = -1;
+                    tooFast.Add(frame);
+                    continue;
                 }
 
-                if (follows)
-                {
-                    var moved = Bounded(curve.Samples[i], smoothed.Samples[i].Normalised(), largest);
-                    var angle = Angle.Between(curve.Samples[i], moved);
-                    samples[frame] = angle > Unchanged ? curve.Signed(i, moved) : samples[frame];
-                    size = Math.Max(size, angle);
-                }
+                var moved = Bounded(curve.Samples[i], smoothed.Samples[i].Normalised(), largest);
+                var angle = Angle.Between(curve.Samples[i], moved);
+                samples[frame] = angle > Unchanged ? curve.Signed(i, moved) : samples[frame];
+                size = Math.Max(size, angle);
             }
 
             rows.Add(Row(joint, stretch, FaultAction.Smoothed) with { SizeRadians = size });
+            rows.AddRange(TooFast(joint, tooFast));
         }
 
         var noise = 2 * Math.Sqrt(Noise.Variance(squared, smoothed.Leverage, curve.Finest));
@@ -122,15 +120,31 @@ public sealed class SmoothStage : IStage
 
     private static Quat Bounded(Quat from, Quat to, double largest)
     {
+        if (double.IsPositiveInfinity(largest))
+        {
+            return to;
+        }
+
         var turn = RotationVector.From(from, to);
         var angle = turn.Norm;
         return angle <= largest ? to : from * RotationVector.Exp(largest / angle * turn);
     }
 
-    private static Finding TooFast(int joint, Segment run) => Row(joint, run, FaultAction.Unsmoothed) with
+    // A row for every run of neighbouring frames.
+    private static IEnumerable<Finding> TooFast(int joint, List<int> frames)
     {
-        Note = "kept as it was: the joint turns faster here than the filter can follow",
-    };
+        for (var (first, n) = (0, 1); n <= frames.Count; n++)
+        {
+            if (n == frames.Count || frames[n] > frames[n - 1] + 1)
+            {
+                yield return Row(joint, new Segment(frames[first], frames[n - 1]), FaultAction.Unsmoothed) with
+                {
+                    Note = "kept as it was: the joint turns faster here than the filter can follow",
+                };
+                first = n;
+            }
+        }
+    }
 
     private static Finding Row(int joint, Segment run, FaultAction action) =>
         new() { Joint = joint, First = run.First, Last = run.Last, Kind = FaultKind.Smoothing, Action = action };

@@ -45,9 +45,9 @@ internal sealed class Unrolled
         Vector256<double> byX = default, byY = default, byZ = default;
         for (var s = 0; s + 1 < rows.Starts.Length; s++)
         {
-            for (var i = rows.Starts[s] + rows.Order; i < rows.Starts[s + 1]; i++)
+            for (var i = rows.Starts[s] + 3; i < rows.Starts[s + 1]; i++)
             {
-                var d = rows.Difference(smoothed, i);
+                var d = rows.ThirdDifference(smoothed, i);
                 var seen = d / local[i];
                 byX += seen * d[0];
                 byY += seen * d[1];
