@@ -28,6 +28,7 @@ internal sealed class KeySearch<TCurve> : IDisposable
     private readonly double chord;
     private readonly double cosWidest;
     private readonly double cosHopeless;
+    private readonly double widestStray;
     private readonly Suspects suspects = new();
 
     // What is known from the key at work: the balls of frames, what they leave, and whether every frame before the first unmarked is in.
@@ -46,6 +47,7 @@ internal sealed class KeySearch<TCurve> : IDisposable
         cosWidest = limits.CosWidest;
         // A frame turned further than the widest key and the tolerance: playback that never turns back cannot pass it and return.
         cosHopeless = Math.Cos(Math.Min(Math.PI, limits.Widest + limits.Tolerance) / 2) - 1e-9;
+        widestStray = TCurve.Stray(widest);
         latest = ArrayPool<int>.Shared.Rent(stretch.Count);
         var time = stretch.Time;
         for (var (n, end) = (0, 0); n < stretch.Count; n++)
@@ -107,11 +109,7 @@ internal sealed class KeySearch<TCurve> : IDisposable
     [MethodImpl(MethodImplOptions.AggressiveOptimization)]
     private void Scan(int key, int first)
     {
-        var (last, stray) = (latest[key], TCurve.Stray(widest));
-        if (stray > 0)
-        {
-            (last, stray) = Horizon(key, first, stray);
-        }
+        var (last, stray) = widestStray > 0 ? Horizon(key, first) : (latest[key], 0);
 
         Begin(key, stray);
         if (last < first || !Survey(key, first))
@@ -158,14 +156,14 @@ internal sealed class KeySearch<TCurve> : IDisposable
     /// For a playback that strays from constant speed: no end after the frame returned is possible, and how far playback to any end up to
     /// it can stray. With the widest stray allowed, frames ever further out are put in until nothing is left.
     /// </summary>
-    private (int Last, double Stray) Horizon(int key, int first, double stray)
+    private (int Last, double Stray) Horizon(int key, int first)
     {
-        Begin(key, stray);
+        Begin(key, widestStray);
         var last = latest[key];
-        var step = Math.Max(1, (first - key) / 8);
-        var (a, b, c, d) = (key + ((first - key + 3) / 4), key + ((first - key + 1) / 2), key + (3 * (first - key) / 4), first);
+        var length = first - key;
+        var (a, b, c, d) = (key + ((length + 1) / 2), first, Math.Min(last, first + (length / 2)), Math.Min(last, first + length));
         var isOpen = Put(a, b, c, d);
-        for (; isOpen && d < last; step *= 2)
+        for (var step = length; isOpen && d < last; step *= 2)
         {
             (a, b) = (Math.Min(last, d + step), Math.Min(last, d + (2 * step)));
             (c, d) = (Math.Min(last, d + (3 * step)), Math.Min(last, d + (4 * step)));
