@@ -1,4 +1,3 @@
-using MocapClean.Core.Orientation;
 using MocapClean.Core.Takes;
 
 namespace MocapClean.Core.Kernels;
