@@ -74,8 +74,10 @@ internal static class SpoiltTake
     private static void Clear(Quat[] track, int from, int to) => track.AsSpan(from, to - from).Fill(Quat.Missing);
 
     /// <summary>Numbers in [-1, 1] that look random, by a linear congruence (Numerical Recipes' constants, from memory).</summary>
-    private sealed class Noise(uint state)
+    private sealed class Noise(uint seed)
     {
+        private uint state = seed;
+
         public double Next()
         {
             state = (state * 1664525) + 1013904223;
