@@ -1,9 +1,9 @@
 namespace MocapClean.Core.Stages.Reduce;
 
 /// <summary>
-/// Of all smallest sets of keys, one with smaller errors. The rule: from the first inner key to the last, each moves by up to two frames to
-/// where the larger error of its two spans is smallest; of equal places it takes the earliest. In trials this took 2 to 5 % off the RMS
-/// error, and moves further than two frames next to nothing more.
+/// Of all smallest sets of keys, one with smaller errors. The rule: from the first inner key to the last, each goes to the frame before it,
+/// and once more, as long as the larger error of its two spans falls; if it did not go, it tries the frames after it likewise. In trials
+/// this took 2 to 5 % off the RMS error, and going further than two frames next to nothing more.
 /// </summary>
 internal static class KeyBalance
 {
@@ -27,15 +27,27 @@ internal static class KeyBalance
             return key;
         }
 
-        var best = key;
         var error = Error<TCurve>(stretch, before, key, after, double.PositiveInfinity);
-        for (var n = Math.Max(before + 1, key - Reach); n <= Math.Min(after - 1, key + Reach); n++)
+        var earlier = Step<TCurve>(stretch, before, key, after, -1, limits, ref error);
+        return earlier < key ? earlier : Step<TCurve>(stretch, before, key, after, 1, limits, ref error);
+    }
+
+    /// <summary>Goes frame by frame in one direction as long as the error falls.</summary>
+    private static int Step<TCurve>(Stretch stretch, int before, int key, int after, int by, SpanLimits limits, ref double error)
+        where TCurve : struct, ICurve<TCurve>
+    {
+        var best = key;
+        for (var n = key + by; n > before && n < after && Math.Abs(n - key) <= Reach; n += by)
         {
-            if (n != key && limits.Allow<TCurve>(stretch, before, n) && limits.Allow<TCurve>(stretch, n, after))
+            var other = limits.Allow<TCurve>(stretch, before, n) && limits.Allow<TCurve>(stretch, n, after)
+                ? Error<TCurve>(stretch, before, n, after, error)
+                : double.PositiveInfinity;
+            if (other >= error)
             {
-                var other = Error<TCurve>(stretch, before, n, after, error);
-                (best, error) = other < error || (other <= error && n < best) ? (n, other) : (best, error);
+                break;
             }
+
+            (best, error) = (n, other);
         }
 
         return best;

@@ -209,27 +209,32 @@ internal sealed class KeySearch<TCurve> : IDisposable
         return true;
     }
 
-    /// <summary>Puts in all frames between the key and the first unmarked frame. False as soon as nothing is left.</summary>
+    /// <summary>Puts in all frames between the key and the first unmarked frame, far ones first. False as soon as nothing is left.</summary>
     private bool Fill(int key, int first)
     {
         isWhole = true;
-        for (var block = key + 1; block < first; block += 4)
+        var block = first - 4;
+        for (; block > key + 1; block -= 4)
         {
-            if (!Put(block, Math.Min(block + 1, first - 1), Math.Min(block + 2, first - 1), Math.Min(block + 3, first - 1)))
+            if (!Put(stretch.Four(block), stretch.Times(block)))
             {
                 return false;
             }
         }
 
-        return true;
+        // The four next to the key, some of them perhaps a second time, which does no harm.
+        return first - key > 4 ? Put(stretch.Four(key + 1), stretch.Times(key + 1)) : Put(key + 1, key + 1, Math.Min(key + 2, first - 1), first - 1);
     }
+
+    /// <summary>Puts in any four frames.</summary>
+    private bool Put(int a, int b, int c, int d) => Put(stretch.Four(a, b, c, d), stretch.Times(a, b, c, d));
 
     /// <summary>Puts in four frames. False where nothing is left, or where one of them cannot be passed.</summary>
     [MethodImpl(MethodImplOptions.AggressiveOptimization)]
-    private bool Put(int a, int b, int c, int d)
+    private bool Put(in FourQuats samples, Vector256<double> times)
     {
         FourBalls four = default;
-        balls.Of(stretch.Four(a, b, c, d), stretch.Times(a, b, c, d), ref four);
+        balls.Of(samples, times, ref four);
         corridor.Narrow(ref four);
         if (Vector256.LessThanAny(Vector256.Abs(four.Facing), Vector256.Create(cosHopeless)))
         {
