@@ -9,7 +9,6 @@ namespace MocapClean.Cli.Batch;
 internal sealed class AddressOf(SessionConfig config, Config.Sources.SlateTable slates)
 {
     /// <summary>The labels of a take that was read.</summary>
-    /// <exception cref="InputFormatException">Its slate lies outside the take.</exception>
     public FrameLabels Labels(ITakeFile file)
     {
         var first = config.Output.FirstFrame;
@@ -19,11 +18,14 @@ internal sealed class AddressOf(SessionConfig config, Config.Sources.SlateTable 
         }
 
         return slates.For(file.Take.Name) is { } row
-            ? new FrameLabels(first, FromSlate(file.Take, row.Slate))
+            ? FromSlate(file.Take, row.Slate, first)
             : new FrameLabels(first, _ => "");
     }
 
-    private static Func<int, string> FromSlate(Take take, Slate slate) => slate.Frame < take.Length
-        ? frame => slate.At(take.Clock, frame).ToString()
-        : throw new InputFormatException(take.Name, "", $"a slate at frame {slate.Frame}", $"a frame of the take, 0 to {take.Length - 1}");
+    private static FrameLabels FromSlate(Take take, Slate slate, int first) => slate.Frame < take.Length
+        ? new FrameLabels(first, frame => slate.At(take.Clock, frame).ToString())
+        : new FrameLabels(first, _ => "")
+        {
+            Note = $"the slate stands at frame {first + slate.Frame}, outside the take: no time code",
+        };
 }

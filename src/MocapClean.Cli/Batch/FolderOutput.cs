@@ -1,3 +1,5 @@
+using MocapClean.Cli.Config.Sources;
+
 namespace MocapClean.Cli.Batch;
 
 /// <summary>
@@ -10,13 +12,15 @@ public sealed class FolderOutput : IOutput
     public const string Unfinished = ".unfinished";
 
     private readonly string root;
+    private readonly string realRoot;
 
     /// <summary>An output folder; made if it is not there.</summary>
     /// <exception cref="IOException">The folder cannot be made.</exception>
     public FolderOutput(string root)
     {
-        this.root = Path.GetFullPath(root);
+        this.root = Path.TrimEndingDirectorySeparator(Path.GetFullPath(root));
         Directory.CreateDirectory(this.root);
+        realRoot = RealPath.Of(this.root);
     }
 
     /// <summary>The folder.</summary>
@@ -27,7 +31,8 @@ public sealed class FolderOutput : IOutput
     public string Place(string path)
     {
         var full = Path.GetFullPath(Path.Combine(root, path));
-        return full.StartsWith(root + Path.DirectorySeparatorChar, StringComparison.Ordinal)
+        // A link inside the folder may lead to the delivered takes, so the real place counts.
+        return full != root && RealPath.IsWithin(full, root) && RealPath.IsWithin(RealPath.Of(Path.GetDirectoryName(full)!), realRoot)
             ? full
             : throw new IOException($"{path}: this output would lie outside the output folder");
     }
@@ -38,10 +43,11 @@ public sealed class FolderOutput : IOutput
         var place = Place(path);
         Directory.CreateDirectory(Path.GetDirectoryName(place)!);
         var temporary = place + Unfinished;
+        File.Delete(temporary);
         try
         {
             string hash;
-            using (var file = new FileStream(temporary, FileMode.Create, FileAccess.Write, FileShare.None, 1 << 16))
+            using (var file = new FileStream(temporary, FileMode.CreateNew, FileAccess.Write, FileShare.None, 1 << 16))
             using (var hashed = new HashedStream(file))
             {
                 write(hashed);

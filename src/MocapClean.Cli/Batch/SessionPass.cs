@@ -27,7 +27,7 @@ public sealed class SessionPass(IOutput output, Journal? journal)
             var (summary, stale) = now.GetValueOrDefault(take.Name) is { } done ? (done, false) : runner.Earlier(take);
             return (take, summary, stale);
         }).ToList();
-        var leftovers = output is FolderOutput folder ? OutputFolderState.Leftovers(folder, plan) : [];
+        var leftovers = output is FolderOutput folder ? OutputFolderState.Leftovers(folder, plan, all.Where(t => t.summary?.Failure is not null).Select(t => t.take.Name).ToHashSet(StringComparer.Ordinal)) : [];
         var report = SessionAssembly.Build(plan, all, leftovers);
         output.Write("reshoot.csv", s => ReshootCsv.Write(report, s));
         output.Write("session.json", s => SessionJson.Write(report, s));

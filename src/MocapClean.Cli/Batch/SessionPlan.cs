@@ -34,14 +34,17 @@ public sealed record SessionPlan
     /// <summary>The effective settings, for the session report and for the journal.</summary>
     public required ImmutableArray<SettingRow> Settings { get; init; }
 
-    /// <summary>Fingerprint of all that can change an output beside the source: settings, slates, program version.</summary>
+    /// <summary>What the slates say of a take, as one text; empty where they say nothing.</summary>
+    public required Func<string, string> SlateTextFor { get; init; }
+
+    /// <summary>Fingerprint of all that can change an output beside the source and its slate: settings, program.</summary>
     public required string Fingerprint { get; init; }
 
     /// <summary>Whether keys are written.</summary>
     public bool WriteKeys { get; init; } = true;
 
     /// <summary>A larger source file is not read, bytes.</summary>
-    public long LargestTake { get; init; } = 4L << 30;
+    public required long LargestTake { get; init; }
 
     /// <summary>Takes processed at the same time.</summary>
     public int Workers { get; init; } = Environment.ProcessorCount;

@@ -30,7 +30,8 @@ public static class SessionPlanner
             LabelsFor = addresses.Labels,
             ActionFor = take => Action(slates.For(take)),
             Settings = settings,
-            Fingerprint = Fingerprint(settings, slates),
+            SlateTextFor = take => slates.For(take) is { } s ? $"{s.Slate.Frame} {s.Slate.Address} {s.ActionFirst} {s.ActionLast}" : "",
+            Fingerprint = Fingerprint(settings),
             WriteKeys = config.Output.Keys.Contains("csv"),
             LargestTake = config.Limits.TakeSize,
             Workers = workers,
@@ -42,10 +43,9 @@ public static class SessionPlanner
     private static Segment? Action(TakeSlate? slate) =>
         slate is null or { ActionFirst: null, ActionLast: null } ? null : new Segment(slate.ActionFirst ?? 0, slate.ActionLast ?? int.MaxValue);
 
-    /// <summary>All that can change an output beside the source; where the output lies and how the session is called does not.</summary>
-    private static string Fingerprint(ImmutableArray<SettingRow> settings, SlateTable slates) => SessionRunner.Fingerprint(string.Join(
+    /// <summary>All that can change an output; where the output lies and how the session is called does not.</summary>
+    private static string Fingerprint(ImmutableArray<SettingRow> settings) => SessionRunner.Fingerprint(string.Join(
         '\n',
-        settings.Where(s => s.Key is not ("session" or "output.folder" or "ingest.takes" or "ingest.except")).Select(s => $"{s.Key} {s.Value}")
-            .Concat(slates.ByTake.Values.OrderBy(s => s.Take, StringComparer.Ordinal).Select(s => $"{s.Take} {s.Slate.Frame} {s.Slate.Address} {s.ActionFirst} {s.ActionLast}"))
-            .Append(ProgramVersion.Text)));
+        settings.Where(s => s.Key is not ("session" or "output.folder" or "ingest.takes" or "ingest.except" or "time-code.slates"))
+            .Select(s => $"{s.Key} {s.Value}").Append(ProgramVersion.Build)));
 }

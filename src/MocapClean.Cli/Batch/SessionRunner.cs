@@ -41,11 +41,11 @@ public sealed class SessionRunner(SessionPlan plan, IOutput output, Journal? jou
         try
         {
             var (_, sha256) = SourceFile.Read(take, plan.LargestTake);
-            return IsStill(entry, sha256) ? (entry.Summary, false) : (null, true);
+            return IsStill(entry, take, sha256) ? (entry.Summary, false) : (null, true);
         }
-        catch (InputFormatException)
+        catch (InputFormatException e)
         {
-            return (null, true);
+            return (TakeSummary.Failed(take.Name, "", e.Message), false);
         }
     }
 
@@ -64,29 +64,43 @@ public sealed class SessionRunner(SessionPlan plan, IOutput output, Journal? jou
         {
             TakeSource source;
             (source, sha256) = times.Measure("source", () => SourceFile.Read(take, plan.LargestTake));
-            if (journal?.Find(take.Name) is { } entry && IsStill(entry, sha256))
+            if (journal?.Find(take.Name) is { Summary.Failure: null } entry && IsStill(entry, take, sha256))
             {
                 return (entry.Summary, true);
             }
 
             // A second signal ends the process at once, so a take that was begun is always finished or not written.
             var outcome = new TakeJob(plan, output, times).Run(source, sha256, workers, CancellationToken.None);
-            journal?.Append(new JournalEntry(Key(sha256), outcome.Files, outcome.Summary));
+            journal?.Append(new JournalEntry(Key(take, sha256), outcome.Files, outcome.Summary));
             return (outcome.Summary, false);
         }
-        catch (InputFormatException e)
+        catch (Exception e)
         {
-            return (TakeSummary.Failed(take.Name, sha256, e.Message), false);
-        }
-        catch (Exception e) when (e is IOException or UnauthorizedAccessException or OutOfMemoryException or InvalidOperationException or ArithmeticException)
-        {
-            return (TakeSummary.Failed(take.Name, sha256, $"{take.Name}: not processed: {e.Message}"), false);
+            return (Failed(take, sha256, e), false);
         }
     }
 
-    private string Key(string sha256) => Fingerprint($"{plan.Fingerprint}\n{sha256}");
+    /// <summary>One bad take never stops a session, whatever is wrong with it or with this program.</summary>
+    private TakeSummary Failed(PlannedTake take, string sha256, Exception e)
+    {
+        var root = output is FolderOutput folder ? folder.Root + Path.DirectorySeparatorChar : "\0";
+        var message = e is InputFormatException ? e.Message : $"{take.Name}: not processed: {e.Message.Replace(root, "", StringComparison.Ordinal)}";
+        var failed = TakeSummary.Failed(take.Name, sha256, message);
+        try
+        {
+            journal?.Append(new JournalEntry(Key(take, sha256), [], failed));
+        }
+        catch (IOException)
+        {
+            // A full disk: the next run finds no line and does the take again.
+        }
 
-    private bool IsStill(JournalEntry entry, string sha256) => entry.Key == Key(sha256)
+        return failed;
+    }
+
+    private string Key(PlannedTake take, string sha256) => Fingerprint($"{plan.Fingerprint}\n{plan.SlateTextFor(take.Name)}\n{sha256}");
+
+    private bool IsStill(JournalEntry entry, PlannedTake take, string sha256) => entry.Key == Key(take, sha256)
         && output is FolderOutput folder && entry.Files.All(f => IsWhole(folder, f));
 
     private static bool IsWhole(FolderOutput folder, WrittenFile file)

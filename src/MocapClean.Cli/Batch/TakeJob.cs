@@ -23,13 +23,29 @@ public sealed class TakeJob(SessionPlan plan, IOutput output, StageTimes times)
     public TakeOutcome Run(TakeSource source, string sha256, int workers, CancellationToken cancel)
     {
         var file = times.Measure("read", () => Read(source));
+        var labels = plan.LabelsFor(file);
+        var action = plan.ActionFor(source.Name);
         var take = Clean(file.Take, workers, cancel);
-        var (keysText, keys) = times.Measure("keys", () => KeysCsv.Replayed(take, SettingsOf(take), plan.LabelsFor(file)));
+        take = take with { Notes = [.. take.Notes, .. Notes(take, labels, action)] };
+        var (keysText, keys) = times.Measure("keys", () => KeysCsv.Replayed(take, SettingsOf(take), labels));
         var diff = times.Measure("diff", () => TakeDiff.Of(take));
-        var judgement = Judge.Of(take, plan.ActionFor(take.Name), plan.Verdict, JointGlobs.MatchesAny);
-        var report = new TakeReport(take, diff, judgement, plan.LabelsFor(file), keys);
+        var judgement = Judge.Of(take, action, plan.Verdict, JointGlobs.MatchesAny);
+        var report = new TakeReport(take, diff, judgement, labels, keys);
         var summary = TakeSummary.Of(report, sha256);
         return new TakeOutcome(summary, times.Measure("write", () => Write(file, report, summary, keysText)));
+    }
+
+    private static IEnumerable<string> Notes(Take take, FrameLabels labels, Segment? action)
+    {
+        if (labels.Note.Length > 0)
+        {
+            yield return labels.Note;
+        }
+
+        if (action is { } frames && !Judge.Meets(frames, take.Length))
+        {
+            yield return "the slate's action lies outside the take: the whole take counts";
+        }
     }
 
     private ITakeFile Read(TakeSource source)

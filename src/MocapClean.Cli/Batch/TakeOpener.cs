@@ -14,9 +14,15 @@ public static class TakeOpener
 
     /// <summary>The take of a file, with how it was read; the guess is null where the defaults fit.</summary>
     /// <exception cref="InputFormatException">The take cannot be processed.</exception>
+    /// <exception cref="FileNotFoundException">There is no such file.</exception>
     public static (ITakeFile File, ReadSettings Read, CsvGuess? Guess) Open(string path)
     {
-        var name = Path.GetFileName(path);
+        if (!File.Exists(path))
+        {
+            throw new FileNotFoundException(Directory.Exists(path) ? $"{path}: is a folder; name a take" : $"{path}: no such file");
+        }
+
+        var name = path.Replace(Path.DirectorySeparatorChar, '/');
         var (source, _) = SourceFile.Read(new PlannedTake(name, path), Array.MaxLength);
         var format = FormatCatalog.For(name)
             ?? throw new InputFormatException(name, "", "an unknown kind of file", $"one of {FormatCatalog.Endings}");

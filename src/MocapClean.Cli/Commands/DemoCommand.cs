@@ -20,6 +20,12 @@ internal static class DemoCommand
 
     private static int Write(string folder, ulong seed)
     {
+        if (Directory.Exists(folder) && Directory.EnumerateFileSystemEntries(folder).Any())
+        {
+            Terminal.Error($"{folder}: is not empty; demo writes to a new or empty folder");
+            return ExitCode.Usage;
+        }
+
         try
         {
             var written = DemoSession.Write(new FolderOutput(folder), seed);

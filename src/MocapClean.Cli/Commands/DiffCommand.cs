@@ -22,20 +22,31 @@ internal static class DiffCommand
         PathArguments.RefuseOptions(before);
         PathArguments.RefuseOptions(after);
         var command = new Command("diff", "Compares two takes joint by joint, in degrees.") { before, after, output, shift, strict, tolerance };
+        tolerance.Validators.Add(r =>
+        {
+            if (r.Tokens.Count == 1 && !(double.TryParse(r.Tokens[0].Value, out var degrees) && degrees >= 0))
+            {
+                r.AddError("--tolerance takes degrees, 0 or more");
+            }
+        });
         command.SetAction(parsed =>
         {
             try
             {
-                var comparison = TakeComparison.Of(
-                    TakeOpener.Ingest(parsed.GetRequiredValue(before)), TakeOpener.Ingest(parsed.GetRequiredValue(after)), parsed.GetValue(shift));
+                var (first, second) = (TakeOpener.Ingest(parsed.GetRequiredValue(before)), TakeOpener.Ingest(parsed.GetRequiredValue(after)));
+                var comparison = TakeComparison.Of(first, second, parsed.GetValue(shift));
+                if (first.Space != second.Space)
+                {
+                    Console.Out.WriteLine("one take is read as orientations in the room, the other as relative to the parent: the angles mean little");
+                }
+
                 Print(comparison);
                 if (parsed.GetValue(output) is { } folder)
                 {
                     new FolderOutput(folder).Write("comparison.csv", s => ComparisonCsv.Write(comparison, s));
                 }
 
-                var beyond = comparison.Joints.Any(j => j.Change.Largest > Angle.FromDegrees(parsed.GetValue(tolerance)));
-                return parsed.GetValue(strict) && beyond ? ExitCode.Strict : ExitCode.Done;
+                return parsed.GetValue(strict) && !comparison.IsWithin(Angle.FromDegrees(parsed.GetValue(tolerance))) ? ExitCode.Strict : ExitCode.Done;
             }
             catch (InputFormatException e)
             {

@@ -19,6 +19,13 @@ internal static class InspectCommand
 
     private static int Inspect(string[] files)
     {
+        var wrong = files.Where(f => !File.Exists(f)).ToList();
+        if (wrong.Count > 0)
+        {
+            wrong.ForEach(f => Terminal.Error(Directory.Exists(f) ? $"{f}: is a folder; name takes" : $"{f}: no such file"));
+            return ExitCode.Usage;
+        }
+
         var looks = new TakeLook?[files.Length];
         var failures = new string?[files.Length];
         Parallel.For(0, files.Length, i =>
@@ -27,9 +34,9 @@ internal static class InspectCommand
             {
                 looks[i] = TakeLook.At(files[i]);
             }
-            catch (InputFormatException e)
+            catch (Exception e)
             {
-                failures[i] = e.Message;
+                failures[i] = e is InputFormatException ? e.Message : $"{files[i]}: not read: {e.Message}";
             }
         });
         for (var i = 0; i < files.Length; i++)

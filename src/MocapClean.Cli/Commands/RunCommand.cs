@@ -26,7 +26,7 @@ internal static class RunCommand
         var quiet = new Option<bool>("--quiet") { Description = "no line for each take, no progress" };
         workers.Validators.Add(r =>
         {
-            if (r.GetValueOrDefault<int>() is < 1 or > MostWorkers)
+            if (r.Tokens.Count > 0 && (!int.TryParse(r.Tokens[0].Value, out var n) || n is < 1 or > MostWorkers))
             {
                 r.AddError($"--workers takes a whole number from 1 to {MostWorkers}");
             }
@@ -36,8 +36,8 @@ internal static class RunCommand
         {
             paths, only, output, workers, fresh, follow, dryRun, strict, quiet,
         };
-        command.SetAction(parsed => new RunSession(terminal).Run(
-            parsed.GetRequiredValue(paths),
+        command.SetAction(parsed => new RunSession(
+            terminal,
             new RunOptions
             {
                 Out = parsed.GetValue(output),
@@ -48,7 +48,7 @@ internal static class RunCommand
                 DryRun = parsed.GetValue(dryRun),
                 Strict = parsed.GetValue(strict),
                 Quiet = parsed.GetValue(quiet),
-            }));
+            }).Run(parsed.GetRequiredValue(paths)));
         return command;
     }
 }

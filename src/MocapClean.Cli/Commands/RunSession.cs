@@ -3,28 +3,23 @@ using MocapClean.Cli.Batch;
 using MocapClean.Cli.Config;
 using MocapClean.Cli.Config.Sources;
 using MocapClean.Cli.Report;
+using MocapClean.Core.Diff;
 using Serilog;
 
 namespace MocapClean.Cli.Commands;
 
 /// <summary>Runs a session for the command line: checks what can be checked before the first take, then processes, then prints.</summary>
-internal sealed class RunSession(Terminal terminal)
+internal sealed class RunSession(Terminal terminal, RunOptions options)
 {
     private static readonly TimeSpan FollowEvery = TimeSpan.FromSeconds(2);
 
     /// <summary>Runs and returns the exit code.</summary>
-    public int Run(string[] paths, RunOptions options)
+    public int Run(string[] paths)
     {
         try
         {
-            var config = Load(paths, options);
-            var (plan, notes) = SessionPlanner.Plan(config, options.Workers);
-            if (Chosen(plan, options).IsEmpty)
-            {
-                throw new ConfigException($"--only: no take matches {string.Join(", ", options.Only)}; the session has {plan.Takes.Length}");
-            }
-
-            return options.DryRun ? Dry(plan, notes, options) : Wet(config, plan, notes, options);
+            var config = Load(paths);
+            return options.DryRun ? Dry(config) : Wet(config);
         }
         catch (ConfigException e)
         {
@@ -37,10 +32,9 @@ internal sealed class RunSession(Terminal terminal)
         }
     }
 
-    private static SessionConfig Load(string[] paths, RunOptions options)
+    private SessionConfig Load(string[] paths)
     {
-        var isConfig = paths.Length == 1 && Path.GetExtension(paths[0]).ToLowerInvariant() is ".yaml" or ".yml";
-        if (isConfig && (File.Exists(paths[0]) || Directory.Exists(paths[0]) || !Path.Exists(paths[0])))
+        if (paths.Length == 1 && Path.GetExtension(paths[0]).ToLowerInvariant() is ".yaml" or ".yml")
         {
             var config = ConfigReader.Load(paths[0]);
             return options.Out is { } folder ? config with { Output = config.Output with { Folder = Path.GetFullPath(folder) } } : config;
@@ -51,27 +45,39 @@ internal sealed class RunSession(Terminal terminal)
             : throw new ConfigException("without a config, --out DIR says where results go");
     }
 
-    private static ImmutableArray<PlannedTake> Chosen(SessionPlan plan, RunOptions options)
+    private (SessionPlan Plan, ImmutableArray<PlannedTake> Chosen, ImmutableArray<string> Notes) Plan(SessionConfig config)
     {
+        var (plan, notes) = SessionPlanner.Plan(config, options.Workers);
         var globs = options.Only.Select(o => new PathGlob(o)).ToList();
-        return globs.Count == 0 ? plan.Takes : [.. plan.Takes.Where(t => globs.Any(g => g.Matches(t.Name)))];
+        var chosen = globs.Count == 0 ? plan.Takes : [.. plan.Takes.Where(t => globs.Any(g => g.Matches(t.Name)))];
+        return chosen.Length > 0
+            ? (plan, chosen, notes)
+            : throw new ConfigException($"--only: no take matches {string.Join(", ", options.Only)}; the session has {plan.Takes.Length}");
     }
 
-    private int Dry(SessionPlan plan, ImmutableArray<string> notes, RunOptions options)
+    private int Dry(SessionConfig config)
     {
+        var (plan, chosen, notes) = Plan(config);
         using var log = terminal.CreateLogger(file: null, options.Quiet);
         using var signals = new Signals();
-        var report = Pass(new SessionPass(new DryOutput(), journal: null), plan, notes, options, log, signals);
+        var report = Pass(new SessionPass(new DryOutput(), journal: null), plan, chosen, notes, log, signals);
         RunSummary.Print(terminal, report, "nothing was written (--dry-run)");
-        return Code(report, options, signals);
+        return Code(report, signals);
     }
 
-    private int Wet(SessionConfig config, SessionPlan plan, ImmutableArray<string> notes, RunOptions options)
+    private int Wet(SessionConfig config)
     {
+        // What is wrong with the takes is said before anything is written; a watch may begin before the first take.
+        var first = options.Follow ? default : Plan(config);
         try
         {
             var output = new FolderOutput(config.OutputFolder);
-            Directory.CreateDirectory(output.Place("log"));
+            foreach (var folder in OutputPaths.Folders)
+            {
+                output.Place($"{folder}/take");
+            }
+
+            Directory.CreateDirectory(Path.GetDirectoryName(output.Place("log/lock"))!);
             using var held = FolderLock.TryTake(output.Place("log/lock"))
                 ?? throw new ConfigException($"output folder '{config.OutputFolder}' is in use by another run");
             OutputFolderState.RemoveUnfinished(output);
@@ -79,10 +85,17 @@ internal sealed class RunSession(Terminal terminal)
             using var journal = Journal.Open(output.Place("log/journal.jsonl"), options.Fresh);
             using var signals = new Signals();
             var session = new SessionPass(output, journal);
-            var report = Pass(session, plan, notes, options, log, signals);
-            report = options.Follow ? Follow(config, session, report, options, log, signals) : report;
+            var report = options.Follow
+                ? Follow(config, session, log, signals)
+                : Pass(session, first.Plan, first.Chosen, first.Notes, log, signals);
+            if (report is null)
+            {
+                terminal.Result("no take came");
+                return signals.Code ?? ExitCode.Done;
+            }
+
             RunSummary.Print(terminal, report, $"report: {output.Place("session.json")}");
-            return Code(report, options, signals);
+            return Code(report, signals);
         }
         catch (Exception e) when (e is IOException or UnauthorizedAccessException)
         {
@@ -91,58 +104,68 @@ internal sealed class RunSession(Terminal terminal)
     }
 
     private SessionReport Pass(
-        SessionPass session, SessionPlan plan, ImmutableArray<string> notes, RunOptions options, ILogger log, Signals signals)
+        SessionPass session, SessionPlan plan, ImmutableArray<PlannedTake> takes, ImmutableArray<string> notes, ILogger log, Signals signals)
     {
         foreach (var note in notes)
         {
             log.Warning("{Note}", note);
         }
 
-        var chosen = Chosen(plan, options);
         SessionReport? report = null;
-        terminal.WithProgress(chosen.Length, options.Quiet, step => report = session.Run(
-            plan, chosen, (summary, kept) => Ended(summary, kept, options, log, step), signals.Stop));
+        terminal.WithProgress(takes.Length, options.Quiet, step => report = session.Run(
+            plan, takes, (summary, kept) => Ended(summary, kept, log, step), signals.Stop));
         return report!;
     }
 
-    private void Ended(TakeSummary summary, bool kept, RunOptions options, ILogger log, Action step)
+    private void Ended(TakeSummary summary, bool kept, ILogger log, Action step)
     {
         step();
         if (summary.Failure is { } failure)
         {
             log.Error("{Failure}", failure);
+            return;
         }
-        else if (!options.Quiet)
-        {
-            foreach (var note in summary.Notes)
-            {
-                log.Warning("{Take}: {Note}", summary.Take, note);
-            }
 
+        foreach (var note in summary.Notes)
+        {
+            log.Warning("{Take}: {Note}", summary.Take, note);
+        }
+
+        if (!options.Quiet)
+        {
             terminal.Result(RunSummary.Line(summary, kept));
         }
     }
 
-    /// <summary>Looks again and again for takes that are new or changed and whose size has settled.</summary>
-    private SessionReport Follow(SessionConfig config, SessionPass session, SessionReport report, RunOptions options, ILogger log, Signals signals)
+    /// <summary>Looks again and again for takes that are new or changed and whose size has settled; null where none came.</summary>
+    private SessionReport? Follow(SessionConfig config, SessionPass session, ILogger log, Signals signals)
     {
         log.Information("following {Takes}; interrupt to end", string.Join(", ", config.Source.Takes));
-        var settled = new SettledFiles();
-        while (!signals.Stop.WaitHandle.WaitOne(FollowEvery))
+        var (settled, report, trouble) = (new SettledFiles(), (SessionReport?)null, "");
+        do
         {
-            var (plan, _) = SessionPlanner.Plan(config, options.Workers);
-            var ready = settled.Ready(Chosen(plan, options));
-            if (ready.Length > 0)
+            try
             {
-                report = session.Run(plan, ready, (summary, kept) => Ended(summary, kept, options, log, () => { }), signals.Stop);
+                var (plan, chosen, _) = Plan(config);
+                var ready = settled.Ready(chosen, plan.SlateTextFor);
+                report = ready.Length > 0 ? Pass(session, plan, ready, [], log, signals) : report;
+                trouble = "";
+            }
+            catch (ConfigException e) when (e.Message != trouble)
+            {
+                // No take yet, a slates file that is being saved, a share that is away: said once, then waited for.
+                trouble = e.Message;
+                log.Warning("{Trouble}", trouble);
+            }
+            catch (ConfigException)
+            {
+                // Said already.
             }
         }
-
+        while (!signals.Stop.WaitHandle.WaitOne(FollowEvery));
         return report;
     }
 
-    private static int Code(SessionReport report, RunOptions options, Signals signals) => ExitCode.Of(
-        report.Takes.Any(t => t.Failure is not null),
-        report.Takes.Any(t => t.Verdict == Core.Diff.VerdictNames.Text(Core.Diff.Verdict.Reshoot)),
-        options.Strict, signals.Code);
+    private int Code(SessionReport report, Signals signals) => ExitCode.Of(
+        report.Takes.Any(t => t.Failure is not null), report.Takes.Any(t => t.Verdict == Verdict.Reshoot.Text()), options.Strict, signals.Code);
 }

@@ -31,7 +31,7 @@ internal static class RunSummary
         var changed = report.Takes.Where(t => t.Failure is null).ToList();
         terminal.Result(
             $"samples: {changed.Sum(t => t.Samples.Identical)} kept to the byte, {changed.Sum(t => t.Samples.Rewritten)} same orientation rewritten, "
-            + $"{changed.Sum(t => t.Samples.Smoothed)} smoothed (by at most {changed.Select(t => t.Samples.LargestSmoothingDeg ?? 0).DefaultIfEmpty().Max():0.###} deg), "
+            + $"{changed.Sum(t => t.Samples.Smoothed)} smoothed (by at most {changed.Select(t => t.Samples.LargestSmoothingDeg ?? 0).DefaultIfEmpty().Max():0.######} deg), "
             + $"{changed.Sum(t => t.Samples.Mended)} mended, {changed.Sum(t => t.Samples.Missing)} missing; {changed.Sum(t => t.Keys.Count)} keys");
         terminal.Result("verdicts: " + string.Join(", ", report.Verdicts.Where(v => v.Takes > 0).Select(v => $"{v.Takes} {v.Verdict}")));
         terminal.Result(closing);

@@ -6,9 +6,6 @@ public sealed record JointDiff
     /// <summary>The joint's name as delivered.</summary>
     public required string Name { get; init; }
 
-    /// <summary>Samples that are there after the run.</summary>
-    public required int Present { get; init; }
-
     /// <summary>Samples missing after the run.</summary>
     public required int Missing { get; init; }
 

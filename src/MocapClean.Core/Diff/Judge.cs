@@ -13,7 +13,7 @@ public static class Judge
     /// <param name="matches">Whether a joint's name matches one of the globs.</param>
     public static Judgement Of(Take take, Segment? action, VerdictSettings settings, Func<string, ImmutableArray<string>, bool> matches)
     {
-        var inside = Clip(action ?? new Segment(0, take.Length - 1), take.Length);
+        var inside = action is { } frames && Meets(frames, take.Length) ? Clip(frames, take.Length) : new Segment(0, take.Length - 1);
         var rows = take.Findings
             .Where(f => f.First <= inside.Last && f.Last >= inside.First)
             .Where(f => f.Joint < 0 || !matches(take.Tracks[f.Joint].Name, settings.Ignore)).ToImmutableArray();
@@ -23,6 +23,9 @@ public static class Judge
         var windows = verdict >= Verdict.LookFirst ? Windows.Of(take, rows, inside, settings) : [];
         return new Judgement(verdict, reason, windows, bad.Sum(b => b.Count), lost, inside.Count);
     }
+
+    /// <summary>At least one frame of the action lies in the take; an action that does not counts as none.</summary>
+    public static bool Meets(Segment action, int frames) => action.First < frames && action.Last >= 0 && action.First <= action.Last;
 
     private static Segment Clip(Segment action, int frames) =>
         new(Math.Clamp(action.First, 0, frames - 1), Math.Clamp(action.Last, 0, frames - 1));

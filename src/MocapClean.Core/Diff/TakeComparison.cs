@@ -12,6 +12,12 @@ namespace MocapClean.Core.Diff;
 public sealed record TakeComparison(
     ImmutableArray<JointComparison> Joints, ImmutableArray<string> OnlyBefore, ImmutableArray<string> OnlyAfter, int PairedFrames)
 {
+    /// <summary>
+    /// Both takes have the same joints, some frames in common, the same samples missing, and no angle above the tolerance in radians.
+    /// </summary>
+    public bool IsWithin(double tolerance) => OnlyBefore.IsEmpty && OnlyAfter.IsEmpty && PairedFrames > 0
+        && Joints.All(j => j.MissingBefore + j.MissingAfter == 0 && j.Change.Largest <= tolerance);
+
     /// <summary>Compares two takes.</summary>
     /// <param name="before">The first take, after ingest.</param>
     /// <param name="after">The second take, after ingest.</param>

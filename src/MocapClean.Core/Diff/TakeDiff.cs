@@ -63,7 +63,6 @@ public sealed record TakeDiff
         return new JointDiff
         {
             Name = track.Name,
-            Present = track.Length - missing,
             Missing = missing,
             Identical = identical,
             Rewritten = rewritten,

@@ -6,7 +6,7 @@ namespace MocapClean.Core.Kernels;
 public static class JitterEstimate
 {
     /// <summary>Sum of the squares of 1, 3, 3, 1: what a third difference makes of the variance of white noise.</summary>
-    private const double Gain = 20;
+    private const double DifferenceGain = 20;
 
     /// <summary>Median of the chi-squared distribution with three degrees of freedom: the noise of an orientation has three axes.</summary>
     private const double MedianOfThree = 2.365973884375338;
@@ -35,6 +35,6 @@ public static class JitterEstimate
 
         squares.Sort();
         // A turn moves a quaternion by half its angle.
-        return 2 * Math.Sqrt(squares[squares.Count / 2] / (Gain * MedianOfThree));
+        return 2 * Math.Sqrt(squares[squares.Count / 2] / (DifferenceGain * MedianOfThree));
     }
 }

@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using System.Runtime.ExceptionServices;
 using MocapClean.Core.Takes;
 
 namespace MocapClean.Core.Stages;
@@ -20,7 +21,16 @@ public static class PerJoint
         var before = take.Findings.ToLookup(f => f.Joint);
         var results = new JointResult[take.Tracks.Length];
         var options = new ParallelOptions { MaxDegreeOfParallelism = context.Workers, CancellationToken = context.Cancel };
-        Parallel.For(0, results.Length, options, j => results[j] = work(j, take.Tracks[j], [.. before[j]]));
+        try
+        {
+            Parallel.For(0, results.Length, options, j => results[j] = work(j, take.Tracks[j], [.. before[j]]));
+        }
+        catch (AggregateException e)
+        {
+            // What went wrong in a joint is what the caller wants to hear, not that it happened on a thread.
+            ExceptionDispatchInfo.Throw(e.InnerExceptions[0]);
+        }
+
         return take with
         {
             Tracks = [.. results.Select(r => r.Track)],

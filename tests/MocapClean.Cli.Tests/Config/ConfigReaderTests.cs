@@ -1,3 +1,4 @@
+using MocapClean.Cli.Tests.Support;
 using MocapClean.Cli.Config;
 using MocapClean.Core.Stages.Fill;
 using MocapClean.Core.Stages.Outliers;
@@ -184,19 +185,19 @@ public sealed class ConfigReaderTests
     [Fact]
     public void A_byte_order_mark_and_other_line_ends_do_no_harm()
     {
-        using var folder = new TemporaryFolder();
-        var path = folder.Write("day.yaml", "\uFEFF" + Reading.Least.ReplaceLineEndings("\r\n"));
+        using var folder = new TempFolder();
+        var path = folder.Put("day.yaml", "\uFEFF" + Reading.Least.ReplaceLineEndings("\r\n"));
         Assert.Equal(folder.Path, ConfigReader.Load(path).Folder);
     }
 
     [Fact]
     public void A_file_that_is_no_config_is_refused_in_one_line()
     {
-        using var folder = new TemporaryFolder();
+        using var folder = new TempFolder();
         Assert.Equal($"{folder.Path}: is a folder; a config file is needed here", Message(folder.Path));
         var missing = Path.Combine(folder.Path, "no.yaml");
         Assert.Equal($"{missing}: no such file", Message(missing));
-        var large = folder.Write("large.yaml", "# " + new string('x', 1_000_000));
+        var large = folder.Put("large.yaml", "# " + new string('x', 1_000_000));
         Assert.Equal($"{large}: larger than 1 MB; this is no config", Message(large));
         var binary = Path.Combine(folder.Path, "binary.yaml");
         File.WriteAllBytes(binary, [0x61, 0x3A, 0xFF, 0xFE, 0xC0]);

@@ -1,3 +1,4 @@
+using MocapClean.Cli.Tests.Support;
 using MocapClean.Cli.Config;
 using MocapClean.Cli.Config.Sources;
 using Xunit;
@@ -7,7 +8,7 @@ namespace MocapClean.Cli.Tests.Config;
 public sealed class SlateReaderTests : IDisposable
 {
     private static readonly string[] Takes = ["day1/fight.csv", "day1/run.bvh", "day2/fight.csv"];
-    private readonly TemporaryFolder folder = new();
+    private readonly TempFolder folder = new();
 
     public void Dispose() => folder.Dispose();
 
@@ -81,7 +82,7 @@ public sealed class SlateReaderTests : IDisposable
 
     private SlateTable Read(string text, string output = "{folder: out}")
     {
-        folder.Write("slates.csv", text);
+        folder.Put("slates.csv", text);
         return SlateReader.Read(Config(output), Takes);
     }
 

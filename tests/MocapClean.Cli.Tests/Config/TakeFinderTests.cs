@@ -1,3 +1,4 @@
+using MocapClean.Cli.Tests.Support;
 using MocapClean.Cli.Config;
 using MocapClean.Cli.Config.Sources;
 using Xunit;
@@ -6,7 +7,7 @@ namespace MocapClean.Cli.Tests.Config;
 
 public sealed class TakeFinderTests : IDisposable
 {
-    private readonly TemporaryFolder folder = new();
+    private readonly TempFolder folder = new();
 
     public void Dispose() => folder.Dispose();
 
@@ -136,7 +137,7 @@ public sealed class TakeFinderTests : IDisposable
         Assert.Equal("no: no such file or folder", Assert.Throws<ConfigException>(() => SessionConfig.ForPaths(["no"], "out")).Message);
     }
 
-    private void Write(params string[] names) => Array.ForEach(names, n => folder.Write(n));
+    private void Write(params string[] names) => Array.ForEach(names, n => folder.Put(n));
 
     private void Link(string name, string target) => File.CreateSymbolicLink(Path.Combine(folder.Path, name), Path.Combine(folder.Path, target));
 

@@ -16,6 +16,7 @@ public sealed class UsageTests : IDisposable
         Refused("command");
         Refused("--wrokers", "run", folder.Put("in/a.csv", Takes.Wide()), "--wrokers", "2");
         Refused("--workers", "run", folder["in"], "--out", folder["out"], "--workers", "0");
+        Refused("--workers", "run", folder["in"], "--out", folder["out"], "--workers", "x");
     }
 
     [Fact]
@@ -47,6 +48,25 @@ public sealed class UsageTests : IDisposable
         var take = folder.Put("in/out/takes/a.csv", Takes.Wide());
         Refused("output folder", "run", folder["in"], "--out", folder["in/out"]);
         Assert.Equal(Takes.Wide(), File.ReadAllText(take));
+    }
+
+    [Fact]
+    public void A_link_inside_the_output_folder_does_not_lead_to_the_source()
+    {
+        var take = folder.Put("in/a.csv", Takes.Wide());
+        Directory.CreateDirectory(folder["linked"]);
+        Directory.CreateSymbolicLink(folder["linked/takes"], folder["in"]);
+        Refused("outside the output folder", "run", folder["in"], "--out", folder["linked"]);
+        Assert.Equal(Takes.Wide(), File.ReadAllText(take));
+    }
+
+    [Fact]
+    public void Takes_that_are_not_there_and_a_demo_over_files()
+    {
+        Refused("no such file", "diff", folder["a.csv"], folder["b.csv"]);
+        Refused("is a folder", "inspect", folder.Path);
+        folder.Put("full/session.yaml", "mine");
+        Refused("not empty", "demo", folder["full"]);
     }
 
     [Fact]

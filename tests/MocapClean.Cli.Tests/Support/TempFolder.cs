@@ -8,7 +8,7 @@ internal sealed class TempFolder : IDisposable
     public string this[string relative] => System.IO.Path.Combine(Path, relative);
 
     /// <summary>Writes a text file and returns its path.</summary>
-    public string Put(string relative, string text) => Put(relative, System.Text.Encoding.UTF8.GetBytes(text));
+    public string Put(string relative, string text = "x") => Put(relative, System.Text.Encoding.UTF8.GetBytes(text));
 
     /// <summary>Writes a file and returns its path.</summary>
     public string Put(string relative, byte[] bytes)

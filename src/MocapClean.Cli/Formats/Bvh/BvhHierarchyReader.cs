@@ -18,7 +18,7 @@ internal sealed class BvhHierarchyReader(BvhWords words)
     private readonly List<BvhEnd> ends = [];
     private readonly List<string> columns = [];
     private readonly HashSet<string> names = [];
-    private readonly Stack<Open> open = [];
+    private readonly Stack<OpenJoint> open = [];
 
     /// <summary>Reads the section.</summary>
     public BvhHierarchy Read()
@@ -33,7 +33,7 @@ internal sealed class BvhHierarchyReader(BvhWords words)
             }
             else if (BvhText.Is(word, "ROOT"))
             {
-                OpenJoint(-1);
+                Begin(-1);
             }
             else if (joints.Count > 0 && BvhText.Is(word, "MOTION"))
             {
@@ -61,7 +61,7 @@ internal sealed class BvhHierarchyReader(BvhWords words)
         }
         else if (BvhText.Is(word, "JOINT"))
         {
-            OpenJoint(joint.Index);
+            Begin(joint.Index);
         }
         else if (BvhText.Is(word, "End"))
         {
@@ -77,12 +77,12 @@ internal sealed class BvhHierarchyReader(BvhWords words)
         }
     }
 
-    private static string Expected(Open joint) =>
+    private static string Expected(OpenJoint joint) =>
         $"{(joint.HasVector ? "" : "OFFSET, ")}{(joint.HasChannels ? "" : "CHANNELS, ")}JOINT, End Site or }}";
 
-    private string Name(Open joint) => joints[joint.Index].Name;
+    private string Name(OpenJoint joint) => joints[joint.Index].Name;
 
-    private void OpenJoint(int parent)
+    private void Begin(int parent)
     {
         if (words.NextName().IsEmpty)
         {
@@ -102,7 +102,7 @@ internal sealed class BvhHierarchyReader(BvhWords words)
         }
 
         words.Expect("{");
-        open.Push(new Open(joints.Count));
+        open.Push(new OpenJoint(joints.Count));
         joints.Add(new BvhJoint(name, parent, Vec3.Zero, []));
     }
 
@@ -164,7 +164,7 @@ internal sealed class BvhHierarchyReader(BvhWords words)
     }
 
     /// <summary>A joint whose closing brace has not come yet.</summary>
-    private sealed class Open(int index)
+    private sealed class OpenJoint(int index)
     {
         public int Index { get; } = index;
 

@@ -19,7 +19,7 @@ public static class KeysCsv
     public static (byte[] Text, ImmutableArray<KeySet> Measured) Replayed(Take take, ImmutableArray<StageSettings> settings, FrameLabels labels)
     {
         var text = Write(take, labels);
-        return (text, Replay(text, take, settings));
+        return (text, Replay(text, take, settings, labels));
     }
 
     private static byte[] Write(Take take, FrameLabels labels)
@@ -54,7 +54,7 @@ public static class KeysCsv
         }
     }
 
-    private static ImmutableArray<KeySet> Replay(byte[] text, Take take, ImmutableArray<StageSettings> settings)
+    private static ImmutableArray<KeySet> Replay(byte[] text, Take take, ImmutableArray<StageSettings> settings, FrameLabels labels)
     {
         using var csv = CsvReader.Create(text, new CsvReaderOptions { Separator = ',' });
         var measured = ImmutableArray.CreateBuilder<KeySet>(take.Tracks.Length);
@@ -65,7 +65,11 @@ public static class KeysCsv
             var keys = new Quat[frames.Length];
             for (var k = 0; k < keys.Length; k++)
             {
-                csv.Read();
+                if (!csv.Read() || csv.Parse<int>(1) != labels.Number(frames[k]) || !csv.Parse<double>(2).Equals(take.Clock.Delivered[frames[k]]))
+                {
+                    throw new InvalidOperationException($"keys of {track.Name} do not read back as written");
+                }
+
                 keys[k] = new Quat(csv.Parse<double>(3), csv.Parse<double>(4), csv.Parse<double>(5), csv.Parse<double>(6));
             }
 

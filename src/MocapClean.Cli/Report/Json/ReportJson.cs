@@ -12,15 +12,12 @@ namespace MocapClean.Cli.Report.Json;
 public sealed partial class ReportJson : JsonSerializerContext
 {
     /// <summary>For files that a person may open.</summary>
-    public static ReportJson Indented { get; } = new(Style(indented: true));
+    public static ReportJson Indented { get; } = new(Style());
 
-    /// <summary>For the journal: one line.</summary>
-    public static ReportJson OneLine { get; } = new(Style(indented: false));
-
-    private static JsonSerializerOptions Style(bool indented) => new()
+    private static JsonSerializerOptions Style() => new()
     {
         PropertyNamingPolicy = JsonNamingPolicy.SnakeCaseLower,
-        WriteIndented = indented,
+        WriteIndented = true,
         NewLine = "\n",
         // These files are never pasted into a page as they are; the pages escape for themselves.
         Encoder = JavaScriptEncoder.UnsafeRelaxedJsonEscaping,

@@ -23,7 +23,7 @@ internal static class CubicTurns
             var tick = increments.Tick(first + g) / elapsed;
             var middle = past + (tick / 2);
             turns[g] = (tick * elapsed) * (((1 - middle) * left) + (middle * right));
-            shares[g] = Parabola(past + tick) - Parabola(past);
+            shares[g] = Eased(past + tick) - Eased(past);
             past += tick;
         }
 
@@ -31,7 +31,7 @@ internal static class CubicTurns
     }
 
     /// <summary>The integral from 0 of 6 t (1 - t), which is 1 at 1.</summary>
-    private static double Parabola(double t) => t * t * (3 - (2 * t));
+    private static double Eased(double t) => t * t * (3 - (2 * t));
 
     /// <summary>
     /// Speed at the edge by the straight line through the two nearest increments; of one alone, its own; null without any.

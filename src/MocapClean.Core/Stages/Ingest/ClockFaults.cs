@@ -6,6 +6,9 @@ namespace MocapClean.Core.Stages.Ingest;
 /// <summary>Finds where the delivered time skips, stands still or runs back. Rows of the whole take.</summary>
 internal static class ClockFaults
 {
+    /// <summary>A jump too wild to count frames by, such as a clock that changes to another epoch, is at least this many intervals.</summary>
+    private const double WildAbove = 1e6;
+
     public static ImmutableArray<Finding> Find(Clock clock)
     {
         var found = ImmutableArray.CreateBuilder<Finding>();
@@ -18,6 +21,10 @@ internal static class ClockFaults
             else if (clock.Lost(n) is > 0 and var lost)
             {
                 found.Add(Row(n, FaultKind.LostFrames, FaultAction.Left, $"{lost} {(lost == 1 ? "frame" : "frames")} lost before this one") with { Lost = lost });
+            }
+            else if ((clock.Delivered[n] - clock.Delivered[n - 1]) * clock.Rate > WildAbove)
+            {
+                found.Add(Row(n, FaultKind.Clock, FaultAction.Flagged, $"time jumps by {clock.Delivered[n] - clock.Delivered[n - 1]:0.###} s"));
             }
         }
 

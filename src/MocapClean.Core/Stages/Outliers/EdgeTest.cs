@@ -7,10 +7,10 @@ namespace MocapClean.Core.Stages.Outliers;
 /// <param name="RoomTurn">The rotation on the left of the samples after the edge.</param>
 /// <param name="Joint">Turned on the right, in the joint's own frame: what the test measured so.</param>
 /// <param name="JointTurn">The rotation on the right of the samples after the edge.</param>
-internal readonly record struct EdgeMeasure(Measure Room, Quat RoomTurn, Measure Joint, Quat JointTurn)
+internal readonly record struct EdgeMeasure(RunMeasure Room, Quat RoomTurn, RunMeasure Joint, Quat JointTurn)
 {
     /// <summary>The telling that leaves the motion on both sides in better agreement.</summary>
-    public Measure Better => Joint.Misfit < Room.Misfit ? Joint : Room;
+    public RunMeasure Better => Joint.Misfit < Room.Misfit ? Joint : Room;
 }
 
 /// <summary>
@@ -28,7 +28,7 @@ internal sealed class EdgeTest
     /// <summary>Tests the samples on both sides of a run as if it were not there.</summary>
     public EdgeMeasure? Across(MotionPath path, int first, int last, Pattern most)
     {
-        var neighbours = Neighbours.Of(path, first, last, most, stackalloc int[2 * Pattern.Most]);
+        var neighbours = TrustedNeighbours.Of(path, first, last, most, stackalloc int[2 * Pattern.Most]);
         if (!neighbours.Suffice)
         {
             return null;
@@ -54,11 +54,11 @@ internal sealed class EdgeTest
         var jointTurn = (RotationVector.Exp(fit.Predict(0, room)) * left).Conjugate * right;
         var pattern = neighbours.Pattern;
         return new EdgeMeasure(
-            new Measure(pattern, Chart.Log(roomTurn).Norm, fit.Misfit(joint)), roomTurn,
-            new Measure(pattern, Chart.Log(jointTurn).Norm, fit.Misfit(room)), jointTurn);
+            new RunMeasure(pattern, Chart.Log(roomTurn).Norm, fit.Misfit(joint)), roomTurn,
+            new RunMeasure(pattern, Chart.Log(jointTurn).Norm, fit.Misfit(room)), jointTurn);
     }
 
-    private NeighbourFit Fit(Neighbours neighbours)
+    private NeighbourFit Fit(TrustedNeighbours neighbours)
     {
         if (!neighbours.AreRegular)
         {
@@ -74,7 +74,7 @@ internal sealed class EdgeTest
         return fit;
     }
 
-    private static NeighbourFit Solve(Neighbours neighbours)
+    private static NeighbourFit Solve(TrustedNeighbours neighbours)
     {
         Span<double> times = stackalloc double[neighbours.Count];
         neighbours.Times(times);

@@ -97,7 +97,7 @@ internal sealed class Explanations
         return true;
     }
 
-    private IEnumerable<Story.Spike> Spikes(int longest)
+    private IEnumerable<Story.Pop> Spikes(int longest)
     {
         for (var count = 1; count <= longest; count++)
         {
@@ -111,7 +111,7 @@ internal sealed class Explanations
         }
     }
 
-    private Story.Spike? Spike(int first, int last)
+    private Story.Pop? Spike(int first, int last)
     {
         var least = MotionSpreads * noise;
         if (motion.Explains(first, last, least, least) || spread.Best(TypicalRun) is not { } look
@@ -122,7 +122,7 @@ internal sealed class Explanations
             return null;
         }
 
-        return new Story.Spike
+        return new Story.Pop
         {
             First = first,
             Last = last,
@@ -132,14 +132,14 @@ internal sealed class Explanations
         };
     }
 
-    private double Near(int first, int last, Measure m) =>
+    private double Near(int first, int last, RunMeasure m) =>
         Math.Max(MotionSpreads * spread.OfMotion, MotionPart * Math.Min(m.Size, motion.Pace(first, last)));
 
-    private double Roughly(Measure m) => Math.Max(MotionSpreads * spread.OfMotion, MotionPart * m.Size);
+    private double Roughly(RunMeasure m) => Math.Max(MotionSpreads * spread.OfMotion, MotionPart * m.Size);
 
-    private bool IsFault(Measure m, Measure usual) =>
+    private bool IsFault(RunMeasure m, RunMeasure usual) =>
         m.Size > threshold * usual.Size && m.Misfit < Math.Max(Whole * usual.Misfit, WholeBeside * m.Size);
 
-    private static double Cost(Measure m, Measure usual, int samples) =>
+    private static double Cost(RunMeasure m, RunMeasure usual, int samples) =>
         (m.Misfit / usual.Misfit * (m.Misfit / usual.Misfit)) + (PriceOfSample * samples);
 }

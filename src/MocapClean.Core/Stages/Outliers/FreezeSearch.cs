@@ -26,7 +26,7 @@ internal sealed class FreezeSearch(MotionPath path, int shortest, double noise)
         for (var n = 0; n < path.Length; n++)
         {
             var last = n;
-            while (path.IsWhole(last, last + 1) && SlowUpdate.IsRepeat(path.Samples[last], path.Samples[last + 1]))
+            while (path.IsWhole(last, last + 1) && UpdateRhythm.IsRepeat(path.Samples[last], path.Samples[last + 1]))
             {
                 last++;
             }

@@ -27,7 +27,7 @@ internal static class JointOutliers
     public static JointResult Search(Take take, int joint, StageSettings settings, ImmutableArray<Finding> before)
     {
         var track = take.Tracks[joint];
-        var rhythm = SlowUpdate.Of(track);
+        var rhythm = UpdateRhythm.Of(track);
         var path = MotionPath.Of(track, take.Clock.Rate, take.TextRounding, rhythm);
         var marks = new TrackMarks(joint, track);
         marks.TellGaps();
@@ -42,7 +42,7 @@ internal static class JointOutliers
         return new JointResult(settled, all);
     }
 
-    private static void Search(MotionPath path, SlowUpdate rhythm, StageSettings settings, TrackMarks marks)
+    private static void Search(MotionPath path, UpdateRhythm rhythm, StageSettings settings, TrackMarks marks)
     {
         var (outliers, end) = (settings.Outliers, path.Length - 1);
         int LastFrame(int index) => index >= end ? marks.Length - 1 : rhythm.FrameOf(index + 1) - 1;
@@ -56,7 +56,7 @@ internal static class JointOutliers
         }
 
         var stories = jumps.Run();
-        foreach (var spike in stories.OfType<Story.Spike>())
+        foreach (var spike in stories.OfType<Story.Pop>())
         {
             marks.Reject(rhythm.FrameOf(spike.First), LastFrame(spike.Last), FaultKind.Spike, spike.Size, spike.Spreads);
         }

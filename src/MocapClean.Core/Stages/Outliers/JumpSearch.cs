@@ -63,7 +63,7 @@ internal sealed class JumpSearch(MotionPath path, double threshold, int longestS
     private void Mark(Story story)
     {
         var last = story.First;
-        if (story is Story.Spike spike)
+        if (story is Story.Pop spike)
         {
             last = spike.Last;
             path.Trusted.AsSpan(spike.First, spike.Last - spike.First + 1).Clear();
@@ -85,7 +85,7 @@ internal sealed class JumpSearch(MotionPath path, double threshold, int longestS
         var found = new List<Story>();
         foreach (var story in stories)
         {
-            if (story is Story.Spike next && found.Count > 0 && found[^1] is Story.Spike last
+            if (story is Story.Pop next && found.Count > 0 && found[^1] is Story.Pop last
                 && next.First - last.Last <= Unvouched + 1 && next.Last - last.First < longestSpike)
             {
                 var larger = next.Size > last.Size ? next : last;

@@ -17,21 +17,21 @@ internal sealed class LocalSpread(MotionPath path, Tests tests, (int First, int 
     private const int Wanted = 20;
     private const int Fewest = 8;
 
-    private readonly Dictionary<Pattern, Measure?> ofRuns = [];
-    private readonly Dictionary<Pattern, Measure?> ofEdges = [];
-    private readonly Dictionary<Pattern, Measure?> ofMotion = [];
+    private readonly Dictionary<Pattern, RunMeasure?> ofRuns = [];
+    private readonly Dictionary<Pattern, RunMeasure?> ofEdges = [];
+    private readonly Dictionary<Pattern, RunMeasure?> ofMotion = [];
 
     /// <summary>Spreads of size and misfit of healthy runs seen with the same neighbours; null where nothing healthy is near.</summary>
-    public Measure? OfRun(Pattern pattern) => Once(ofRuns, pattern, first => tests.Runs.At(path, first, first + pattern.Run - 1, pattern));
+    public RunMeasure? OfRun(Pattern pattern) => Once(ofRuns, pattern, first => tests.Runs.At(path, first, first + pattern.Run - 1, pattern));
 
     /// <summary>Spreads of size and misfit of healthy edges.</summary>
-    public Measure? OfEdge(Pattern pattern) => Once(
+    public RunMeasure? OfEdge(Pattern pattern) => Once(
         ofEdges, pattern, first => tests.Edges.Across(path, first, first + pattern.Run - 1, pattern)?.Room);
 
     /// <summary>Spread of the distance of healthy samples from where the motion on one side leads, radians.</summary>
     public double OfMotion => Math.Max(
         noise,
-        Once(ofMotion, new Pattern(4, 1, 4, 2), n => new Measure(default, MotionTest.OneSided(path, n, -1), 0))?.Size ?? 0);
+        Once(ofMotion, new Pattern(4, 1, 4, 2), n => new RunMeasure(default, MotionTest.OneSided(path, n, -1), 0))?.Size ?? 0);
 
     /// <summary>
     /// The look at runs, or at edges, that predicts healthy motion best here: more neighbours where noise is all there is, a more bent path
@@ -53,7 +53,7 @@ internal sealed class LocalSpread(MotionPath path, Tests tests, (int First, int 
         return best;
     }
 
-    private Measure? Once(Dictionary<Pattern, Measure?> known, Pattern pattern, Func<int, Measure?> test)
+    private RunMeasure? Once(Dictionary<Pattern, RunMeasure?> known, Pattern pattern, Func<int, RunMeasure?> test)
     {
         if (!known.TryGetValue(pattern, out var found))
         {
@@ -63,7 +63,7 @@ internal sealed class LocalSpread(MotionPath path, Tests tests, (int First, int 
         return found;
     }
 
-    private Measure? Around(Pattern pattern, Func<int, Measure?> test)
+    private RunMeasure? Around(Pattern pattern, Func<int, RunMeasure?> test)
     {
         var before = OneSide(pattern, place.First - 1, -1, test);
         var after = OneSide(pattern, place.Last + 1, 1, test);
@@ -76,10 +76,10 @@ internal sealed class LocalSpread(MotionPath path, Tests tests, (int First, int 
         var misfit = Math.Max(before?.Misfit ?? 0, after?.Misfit ?? 0);
         // White noise leaves its own size times the root of the free values over.
         var free = Math.Max(1, pattern.Before + pattern.After - pattern.Degree - 1);
-        return new Measure(pattern, Math.Max(size, noise), Math.Max(misfit, noise * Math.Sqrt(free)));
+        return new RunMeasure(pattern, Math.Max(size, noise), Math.Max(misfit, noise * Math.Sqrt(free)));
     }
 
-    private Measure? OneSide(Pattern pattern, int from, int direction, Func<int, Measure?> test)
+    private RunMeasure? OneSide(Pattern pattern, int from, int direction, Func<int, RunMeasure?> test)
     {
         var window = Math.Max((int)(Seconds * path.Rate), Wanted);
         var stride = Math.Max(1, window / Wanted);
@@ -97,6 +97,6 @@ internal sealed class LocalSpread(MotionPath path, Tests tests, (int First, int 
             }
         }
 
-        return count < Fewest ? null : new Measure(pattern, RobustSpread.Of(sizes[..count]), RobustSpread.Of(misfits[..count]));
+        return count < Fewest ? null : new RunMeasure(pattern, RobustSpread.Of(sizes[..count]), RobustSpread.Of(misfits[..count]));
     }
 }

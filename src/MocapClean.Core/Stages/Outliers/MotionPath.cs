@@ -35,7 +35,7 @@ internal sealed class MotionPath
     /// <param name="rate">Frames of the take per second.</param>
     /// <param name="rounding">What rounding of the delivered text can move a sample by, radians.</param>
     /// <param name="rhythm">When the joint has new values.</param>
-    public static MotionPath Of(JointTrack track, double rate, double rounding, SlowUpdate rhythm)
+    public static MotionPath Of(JointTrack track, double rate, double rounding, UpdateRhythm rhythm)
     {
         var count = rhythm.IndexOf(track.Length - 1) + 1;
         var path = new MotionPath

@@ -6,7 +6,7 @@ namespace MocapClean.Core.Stages.Outliers;
 /// <param name="Pattern">What it could see.</param>
 /// <param name="Size">How far the run, or the jump, lies from what the neighbours predict, radians.</param>
 /// <param name="Misfit">How badly the neighbours agree among themselves once the run or the jump is explained away, radians.</param>
-internal readonly record struct Measure(Pattern Pattern, double Size, double Misfit);
+internal readonly record struct RunMeasure(Pattern Pattern, double Size, double Misfit);
 
 /// <summary>
 /// The test of a run: are its samples where a smooth path through the neighbours on both sides would have them, and is that path whole?
@@ -17,9 +17,9 @@ internal sealed class RunTest
     private readonly Dictionary<Pattern, NeighbourFit> regular = [];
 
     /// <summary>Tests the samples from first to last; null where too little is seen to tell.</summary>
-    public Measure? At(MotionPath path, int first, int last, Pattern most)
+    public RunMeasure? At(MotionPath path, int first, int last, Pattern most)
     {
-        var neighbours = Neighbours.Of(path, first, last, most, stackalloc int[2 * Pattern.Most]);
+        var neighbours = TrustedNeighbours.Of(path, first, last, most, stackalloc int[2 * Pattern.Most]);
         if (!neighbours.Suffice)
         {
             return null;
@@ -47,10 +47,10 @@ internal sealed class RunTest
             }
         }
 
-        return new Measure(neighbours.Pattern, Math.Sqrt(size), fit.Misfit(values));
+        return new RunMeasure(neighbours.Pattern, Math.Sqrt(size), fit.Misfit(values));
     }
 
-    private NeighbourFit Fit(Neighbours neighbours)
+    private NeighbourFit Fit(TrustedNeighbours neighbours)
     {
         if (!neighbours.AreRegular)
         {
@@ -66,7 +66,7 @@ internal sealed class RunTest
         return fit;
     }
 
-    private static NeighbourFit Solve(Neighbours neighbours)
+    private static NeighbourFit Solve(TrustedNeighbours neighbours)
     {
         var run = neighbours.Pattern.Run;
         Span<double> times = stackalloc double[neighbours.Count];

@@ -20,7 +20,7 @@ internal abstract record Story
     public required double Cost { get; init; }
 
     /// <summary>A short run without which the path is whole.</summary>
-    public sealed record Spike : Story
+    public sealed record Pop : Story
     {
         /// <summary>Last sample of the run.</summary>
         public required int Last { get; init; }

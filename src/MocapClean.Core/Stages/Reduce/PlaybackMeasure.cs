@@ -23,7 +23,7 @@ internal static class PlaybackMeasure
 
         var (first, last) = (frames[0], frames[^1]);
         using var stretch = new Stretch(samples.Slice(first, last - first + 1), times.Slice(first, last - first + 1));
-        var sum = new Sum { Largest = -1, LargestAt = -1 };
+        var sum = new ErrorSum { Largest = -1, LargestAt = -1 };
         for (var k = 0; k + 1 < frames.Length; k++)
         {
             var (a, b) = (frames[k] - first, frames[k + 1] - first);
@@ -59,7 +59,7 @@ internal static class PlaybackMeasure
         return sum * c;
     }
 
-    private struct Sum
+    private struct ErrorSum
     {
         public double Largest;
         public int LargestAt;

@@ -24,7 +24,7 @@ internal struct CurveSpread
         Vector256<double> Value, Vector256<double> Slope, Vector256<double> Bend, Vector256<double> Sureness);
 
     /// <summary>The spread at the last of the first samples of a stretch, whose noise has variance 1.</summary>
-    public static CurveSpread Of(ReadOnlySpan<PenaltyRows.Share> from)
+    public static CurveSpread Of(ReadOnlySpan<PenaltyRows.Part> from)
     {
         var p = default(CurveSpread);
         foreach (var f in from)
@@ -100,7 +100,7 @@ internal struct CurveSpread
     }
 
     /// <summary>What is known of a sum of value, slope and bend.</summary>
-    public readonly Vector256<double> Seen(PenaltyRows.Share f) =>
+    public readonly Vector256<double> Seen(PenaltyRows.Part f) =>
         (f.Value * f.Value * _vv) + (f.Slope * f.Slope * _ss) + (f.Bend * f.Bend * _bb)
         + (2 * ((f.Value * f.Slope * _vs) + (f.Value * f.Bend * _vb) + (f.Slope * f.Bend * _sb)));
 }

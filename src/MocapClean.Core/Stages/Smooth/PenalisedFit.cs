@@ -183,7 +183,7 @@ internal sealed class PenalisedFit : IDisposable
         private Vector256<double> _slope;
         private Vector256<double> _bend;
 
-        public void Begin(PenaltyRows.Share share, Vector256<double> y)
+        public void Begin(PenaltyRows.Part share, Vector256<double> y)
         {
             _value += share.Value * y;
             _slope += share.Slope * y;
@@ -212,7 +212,7 @@ internal sealed class PenalisedFit : IDisposable
             return noise;
         }
 
-        public readonly Vector256<double> Seen(PenaltyRows.Share share) =>
+        public readonly Vector256<double> Seen(PenaltyRows.Part share) =>
             (share.Value * _value) + (share.Slope * _slope) + (share.Bend * _bend);
     }
 }

@@ -64,9 +64,9 @@ internal sealed class PenaltyRows
 
     /// <summary>Shares of the first samples of a stretch, as many as the order.</summary>
     /// <param name="first">The sample after them.</param>
-    public Share[] Beginning(int first)
+    public Part[] Beginning(int first)
     {
-        var shares = new Share[Order];
+        var shares = new Part[Order];
         shares[^1].Value = 1;
         if (Order >= 2)
         {
@@ -94,7 +94,7 @@ internal sealed class PenaltyRows
 
     /// <summary>What a sample among the first of a stretch adds to the value, slope and bend (divided differences) at the last of them.</summary>
     [StructLayout(LayoutKind.Auto)]
-    public record struct Share(double Value, double Slope, double Bend);
+    public record struct Part(double Value, double Slope, double Bend);
 
     // The penalty is span / order x (order! x divided difference)^2, which on a regular clock is the plain difference squared.
     // The push moves the divided difference of one order less, by the divided difference times the span.

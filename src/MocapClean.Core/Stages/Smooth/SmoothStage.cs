@@ -114,7 +114,7 @@ public sealed class SmoothStage : IStage
             rows.AddRange(TooFast(joint, tooFast));
         }
 
-        var noise = 2 * Math.Sqrt(Noise.Variance(squared, smoothed.Leverage, curve.Finest));
+        var noise = 2 * Math.Sqrt(NoiseEstimate.Variance(squared, smoothed.Leverage, curve.Finest));
         return track with { Samples = [.. samples], Smoothing = new SmoothingMeasure(noise, smoothed.EquivalentCutoff(curve.Rate)) };
     }
 

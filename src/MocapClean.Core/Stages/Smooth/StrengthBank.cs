@@ -69,7 +69,7 @@ internal sealed class StrengthBank : IDisposable
             leverage[i] = _leverage[rung / Lanes][i][rung % Lanes];
         }
 
-        return Noise.Variance(squared, leverage, least);
+        return NoiseEstimate.Variance(squared, leverage, least);
     }
 
     /// <inheritdoc/>

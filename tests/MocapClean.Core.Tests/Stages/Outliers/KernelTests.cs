@@ -106,5 +106,5 @@ public sealed class KernelTests
     }
 
     private static MotionPath Path(Quat[] samples) =>
-        MotionPath.Of(Motion.Take(100, samples).Tracks[0], 100, 1e-9, new SlowUpdate(0, 1));
+        MotionPath.Of(Motion.Take(100, samples).Tracks[0], 100, 1e-9, new UpdateRhythm(0, 1));
 }

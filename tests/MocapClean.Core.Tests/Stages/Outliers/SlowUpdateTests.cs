@@ -42,6 +42,6 @@ public sealed class SlowUpdateTests
         static Quat Restless(double t) => Motion.Swing(Math.Floor(t) + Math.Min(1, 2 * (t - Math.Floor(t))));
         var samples = Motion.Sample(Restless, 120, 10, noise: 0);
         var track = Motion.Take(120, samples).Tracks[0];
-        Assert.Equal(1, SlowUpdate.Of(track).Every);
+        Assert.Equal(1, UpdateRhythm.Of(track).Every);
     }
 }

@@ -33,14 +33,14 @@ public sealed class NoiseCheckTests
         double Square() => Math.Pow(0.2 * NoisyMotion.Normal(random), 2);
         var squared = Enumerable.Range(0, 40000).Select(n => n % 50 == 0 ? 1e6 : 0.75 * (Square() + Square() + Square())).ToArray();
         var leverage = Enumerable.Repeat(0.25, squared.Length).ToArray();
-        Assert.InRange(Noise.Variance(squared, leverage, 0), 0.98 * 0.04, 1.05 * 0.04);
-        Assert.Equal(25, Noise.Variance(squared, leverage, 10));
+        Assert.InRange(NoiseEstimate.Variance(squared, leverage, 0), 0.98 * 0.04, 1.05 * 0.04);
+        Assert.Equal(25, NoiseEstimate.Variance(squared, leverage, 10));
     }
 
     // What the noise makes of the median, with the median of three normal axes taken out again.
     private static double Median(double[] values)
     {
         const double MedianOfThree = 2.365973884375338;
-        return MedianOfThree * Noise.Variance(values, new double[values.Length], 0);
+        return MedianOfThree * NoiseEstimate.Variance(values, new double[values.Length], 0);
     }
 }

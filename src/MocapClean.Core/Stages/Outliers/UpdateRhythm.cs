@@ -9,7 +9,7 @@ namespace MocapClean.Core.Stages.Outliers;
 /// </summary>
 /// <param name="First">The first frame with a new value.</param>
 /// <param name="Every">Frames from one new value to the next; 1 for a joint that keeps up.</param>
-internal readonly record struct SlowUpdate(int First, int Every)
+internal readonly record struct UpdateRhythm(int First, int Every)
 {
     /// <summary>Slowest sensor that is still one: beyond this, repeats are freezes.</summary>
     private const int Slowest = 16;
@@ -27,7 +27,7 @@ internal readonly record struct SlowUpdate(int First, int Every)
     public int FrameOf(int index) => Math.Max(0, (index * Every) - ((Every - First) % Every));
 
     /// <summary>Looks for the rhythm of a track.</summary>
-    public static SlowUpdate Of(JointTrack track)
+    public static UpdateRhythm Of(JointTrack track)
     {
         var gaps = new int[Slowest + 1];
         var last = -1;
@@ -46,8 +46,8 @@ internal readonly record struct SlowUpdate(int First, int Every)
 
         var every = Array.IndexOf(gaps, gaps.Max());
         return every > 1 && changes >= Fewest && Phase(track, every) is var (first, share) && share >= Regular
-            ? new SlowUpdate(first, every)
-            : new SlowUpdate(0, 1);
+            ? new UpdateRhythm(first, every)
+            : new UpdateRhythm(0, 1);
     }
 
     private static (int First, double Share) Phase(JointTrack track, int every)

@@ -3,7 +3,7 @@ using MathNet.Numerics.Statistics;
 namespace MocapClean.Core.Stages.Smooth;
 
 /// <summary>How noisy the samples of a joint are, from what smoothing took away.</summary>
-internal static class Noise
+internal static class NoiseEstimate
 {
     /// <summary>Median of the chi-squared distribution with three degrees of freedom: the noise of an orientation has three axes.</summary>
     private const double MedianOfThree = 2.365973884375338;

@@ -1,11 +1,11 @@
 namespace MocapClean.Core.Stages.Outliers;
 
 /// <summary>The trusted samples nearest to a run on both sides, nearest first.</summary>
-internal readonly ref struct Neighbours
+internal readonly ref struct TrustedNeighbours
 {
     private readonly Pattern most;
 
-    private Neighbours(ReadOnlySpan<int> before, ReadOnlySpan<int> after, Pattern most)
+    private TrustedNeighbours(ReadOnlySpan<int> before, ReadOnlySpan<int> after, Pattern most)
     {
         this.most = most;
         Before = before;
@@ -40,7 +40,7 @@ internal readonly ref struct Neighbours
     /// <param name="last">Its last; one less than the first for an edge between two samples.</param>
     /// <param name="most">Limits on both sides.</param>
     /// <param name="room">Place for twice <see cref="Pattern.Most"/> frames.</param>
-    public static Neighbours Of(MotionPath path, int first, int last, Pattern most, Span<int> room)
+    public static TrustedNeighbours Of(MotionPath path, int first, int last, Pattern most, Span<int> room)
     {
         if (first < 1 || last + 1 >= path.Length || !path.IsUncut(first - 1, last + 1))
         {
