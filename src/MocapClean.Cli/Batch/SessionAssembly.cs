@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using MocapClean.Cli.Config;
 using MocapClean.Cli.Report;
 using MocapClean.Core.Diff;
 
@@ -29,6 +30,11 @@ public static class SessionAssembly
             Settings = plan.Settings,
             Takes = done,
             Trouble = JointTrouble.Across(processed.SelectMany(t => t.PerJoint).Select(j => (j.Name, j.BadFrames, j.Mended))),
+            UnmatchedJoints =
+            [
+                .. plan.JointGlobs.Where(g => processed.Count > 0 && !processed.Any(t => t.PerJoint.Any(j => JointGlobs.MatchesAny(j.Name, [g.Glob]))))
+                    .Select(g => $"{g.Key}: '{g.Glob}' matches no joint"),
+            ],
             NotRun = [.. takes.Where(t => t.Summary is null && !t.Stale).Select(t => t.Take.Name)],
             Stale = [.. takes.Where(t => t.Stale).Select(t => t.Take.Name)],
             Leftovers = leftovers,

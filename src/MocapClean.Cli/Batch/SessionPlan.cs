@@ -40,6 +40,9 @@ public sealed record SessionPlan
     /// <summary>Fingerprint of all that can change an output beside the source and its slate: settings, program.</summary>
     public required string Fingerprint { get; init; }
 
+    /// <summary>Names and globs of joints in the settings, each with the setting that holds it.</summary>
+    public required ImmutableArray<(string Key, string Glob)> JointGlobs { get; init; }
+
     /// <summary>Whether keys are written.</summary>
     public bool WriteKeys { get; init; } = true;
 

@@ -30,6 +30,11 @@ public static class SessionPlanner
             LabelsFor = addresses.Labels,
             ActionFor = take => Action(slates.For(take)),
             Settings = settings,
+            JointGlobs =
+            [
+                .. config.Reshoot.Critical.Select(g => ("reshoot.critical", g)), .. config.Reshoot.Ignore.Select(g => ("reshoot.ignore", g)),
+                .. config.JointNames.Select(g => ("joints", g)),
+            ],
             SlateTextFor = take => slates.For(take) is { } s ? $"{s.Slate.Frame} {s.Slate.Address} {s.ActionFirst} {s.ActionLast}" : "",
             Fingerprint = Fingerprint(settings),
             WriteKeys = config.Output.Keys.Contains("csv"),

@@ -43,8 +43,8 @@ internal static class InspectCommand
         {
             if (looks[i] is { } look)
             {
-                Console.Out.WriteLine(string.Join('\n', look.Lines()));
-                Console.Out.WriteLine();
+                Console.Out.WriteLine(string.Join('\n', look.Lines().Select(l => "# " + l)));
+                Console.Out.WriteLine("#");
             }
             else
             {

@@ -94,7 +94,8 @@ internal sealed class RunSession(Terminal terminal, RunOptions options)
                 return signals.Code ?? ExitCode.Done;
             }
 
-            RunSummary.Print(terminal, report, $"report: {output.Place("session.json")}");
+            var closing = signals.Code is null ? "" : "interrupted: what was finished stays, the next run does the rest; ";
+            RunSummary.Print(terminal, report, $"{closing}report: {output.Place("session.json")}");
             return Code(report, signals);
         }
         catch (Exception e) when (e is IOException or UnauthorizedAccessException)
@@ -131,6 +132,9 @@ internal sealed class RunSession(Terminal terminal, RunOptions options)
             log.Warning("{Take}: {Note}", summary.Take, note);
         }
 
+        log.Information(
+            "{Take} {Verdict} kept {Kept} mended {Mended} missing {Missing} keys {Keys}",
+            summary.Take, summary.Verdict, kept, summary.Samples.Mended, summary.Samples.Missing, summary.Keys.Count);
         if (!options.Quiet)
         {
             terminal.Result(RunSummary.Line(summary, kept));
@@ -140,7 +144,7 @@ internal sealed class RunSession(Terminal terminal, RunOptions options)
     /// <summary>Looks again and again for takes that are new or changed and whose size has settled; null where none came.</summary>
     private SessionReport? Follow(SessionConfig config, SessionPass session, ILogger log, Signals signals)
     {
-        log.Information("following {Takes}; interrupt to end", string.Join(", ", config.Source.Takes));
+        log.Warning("following {Takes}; interrupt to end", string.Join(", ", config.Source.Takes));
         var (settled, report, trouble) = (new SettledFiles(), (SessionReport?)null, "");
         do
         {

@@ -25,16 +25,27 @@ internal static class RunSummary
             terminal.Result($"not processed: {failed.Failure}");
         }
 
+        foreach (var unmatched in report.UnmatchedJoints)
+        {
+            terminal.Result($"mistyped? {unmatched}");
+        }
+
         PrintNames(terminal, "not run", report.NotRun);
         PrintNames(terminal, "out of date", report.Stale);
         PrintNames(terminal, "left over in the output folder", report.Leftovers);
         var changed = report.Takes.Where(t => t.Failure is null).ToList();
         terminal.Result(
             $"samples: {changed.Sum(t => t.Samples.Identical)} kept to the byte, {changed.Sum(t => t.Samples.Rewritten)} same orientation rewritten, "
-            + $"{changed.Sum(t => t.Samples.Smoothed)} smoothed (by at most {changed.Select(t => t.Samples.LargestSmoothingDeg ?? 0).DefaultIfEmpty().Max():0.######} deg), "
+            + $"{changed.Sum(t => t.Samples.Smoothed)} smoothed{AtMost(changed)}, "
             + $"{changed.Sum(t => t.Samples.Mended)} mended, {changed.Sum(t => t.Samples.Missing)} missing; {changed.Sum(t => t.Keys.Count)} keys");
         terminal.Result("verdicts: " + string.Join(", ", report.Verdicts.Where(v => v.Takes > 0).Select(v => $"{v.Takes} {v.Verdict}")));
         terminal.Result(closing);
+    }
+
+    private static string AtMost(List<TakeSummary> takes)
+    {
+        var largest = takes.Select(t => t.Samples.LargestSmoothingDeg ?? 0).DefaultIfEmpty().Max();
+        return largest > 0 ? $" (by at most {largest:0.######} deg)" : "";
     }
 
     private static void PrintWindows(Terminal terminal, SessionReport report)
@@ -47,10 +58,17 @@ internal static class RunSummary
         }
 
         terminal.Result("to shoot again or to look at first (suggestions; for a stunt the coordinator's and the performer's call):");
+        var before = "";
         foreach (var (take, w) in rows.Take(MostWindows))
         {
+            if (take.Take != before)
+            {
+                terminal.Result($"  {take.Verdict}  {take.Take}: {take.Reason}");
+                before = take.Take;
+            }
+
             var code = w.FirstTimecode.Length > 0 ? $"  {w.FirstTimecode} to {w.LastTimecode}" : "";
-            terminal.Result($"  {take.Verdict,-10} {take.Take}  frames {w.FirstFrame} to {w.LastFrame}{code}  {w.Reason}");
+            terminal.Result($"    frames {w.FirstFrame} to {w.LastFrame}{code}  {w.Reason}");
         }
 
         if (rows.Count > MostWindows)

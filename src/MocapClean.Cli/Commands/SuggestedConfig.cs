@@ -6,11 +6,7 @@ internal static class SuggestedConfig
     /// <summary>The text; all takes are read in the same way.</summary>
     public static string For(IReadOnlyList<TakeLook> takes)
     {
-        var folders = takes.Select(t => Path.GetDirectoryName(Path.GetFullPath(t.Path))!).Distinct(StringComparer.Ordinal).ToList();
-        var globs = takes.Count == 1
-            ? [Path.GetFullPath(takes[0].Path)]
-            : folders.SelectMany(f => takes.Where(t => Path.GetDirectoryName(Path.GetFullPath(t.Path)) == f)
-                .Select(t => Path.Combine(f, "*" + Path.GetExtension(t.Path)))).Distinct(StringComparer.Ordinal).ToList();
+        var globs = takes.Select(t => Path.GetFullPath(t.Path)).Distinct(StringComparer.Ordinal).ToList();
         var list = globs.Count == 1 ? $" {Quoted(globs[0])}" : string.Concat(globs.Select(g => $"\n    - {Quoted(g)}"));
         return $"""
             # a config that would run {(takes.Count == 1 ? "it" : "them")}; save it as session.yaml, then: mocapclean run session.yaml

@@ -52,7 +52,8 @@ public sealed class Terminal
     /// <summary>The log: to standard error, and to a file where one is given.</summary>
     public Logger CreateLogger(string? file, bool quiet)
     {
-        var level = quiet ? LogEventLevel.Error : LogEventLevel.Information;
+        // What is only information goes to the file: results tell the same on standard output.
+        var level = quiet ? LogEventLevel.Error : LogEventLevel.Warning;
         var log = new LoggerConfiguration().MinimumLevel.Information();
         log = IsLive
             ? log.WriteTo.Sink(new LiveSink(Progress), level)

@@ -32,7 +32,7 @@ internal static class ConfigCatalog
     {
         IsRequired = true,
         Unset = "required",
-        Example = "\"*Hand\"",
+        Example = "\"hand_*\"",
     };
 
     private static readonly ImmutableArray<StageEntry> Stages = [.. StageCatalog.All.Where(s => s.Settings.Settings.Length > 0)];

@@ -37,6 +37,9 @@ public sealed record SessionConfig
     /// <summary>What the config gives outside <c>joints</c>, by path.</summary>
     internal ImmutableDictionary<string, Given> Given { get; init; } = ImmutableDictionary<string, Given>.Empty;
 
+    /// <summary>Names and globs of the entries of <c>joints</c>.</summary>
+    public IEnumerable<string> JointNames => Layers.SelectMany(l => l.Names);
+
     /// <summary>The output folder, absolute.</summary>
     public string OutputFolder => Absolute(Output.Folder);
 

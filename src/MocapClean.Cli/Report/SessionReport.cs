@@ -27,6 +27,9 @@ public sealed record SessionReport
     /// <summary>Trouble by joint across the takes.</summary>
     public required ImmutableArray<JointTrouble> Trouble { get; init; }
 
+    /// <summary>Settings whose names or globs match no joint of any take: mistyped, most likely.</summary>
+    public required ImmutableArray<string> UnmatchedJoints { get; init; }
+
     /// <summary>Matched takes that no run has processed yet.</summary>
     public required ImmutableArray<string> NotRun { get; init; }
 

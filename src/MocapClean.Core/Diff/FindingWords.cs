@@ -11,7 +11,10 @@ public static class FindingWords
         $"{frames:0.#} {(frames == 1 ? "frame" : "frames")} ({frames / rate:0.00} s)";
 
     /// <summary>What happened, such as <c>jumps by 41 deg and stays</c>.</summary>
-    public static string What(Finding f, double rate) => f.Kind switch
+    public static string What(Finding f, double rate) => Happened(f, rate)
+        + (f.Kind is FaultKind.Gap or FaultKind.Spike or FaultKind.Freeze && f.Note.StartsWith("not filled", StringComparison.Ordinal) ? $" ({f.Note})" : "");
+
+    private static string Happened(Finding f, double rate) => f.Kind switch
     {
         FaultKind.Gap => $"missing for {Length(f.Count, rate)}",
         FaultKind.Spike => $"pops by {Degrees(f)} for {Length(f.Count, rate)}",

@@ -36,11 +36,11 @@ public sealed record VerdictSettings
             "a longer gap that was not filled suggests a re-shoot", (s, v) => s with { LongestGap = v.Extent }),
         new("critical", new Shape.TextList(), "",
             "joints (globs) in which a few bad frames already suggest a re-shoot", (s, v) => s with { Critical = v.List })
-            { Example = "[hips, \"*Foot\"]" },
+            { Example = "[pelvis, \"foot_*\"]" },
         new("critical-frames", Shape.Of(Unit.Frames, 0, 1000000), "3 frames",
             "bad frames in a critical joint that are still accepted", (s, v) => s with { CriticalFrames = v.Whole }),
         new("ignore", new Shape.TextList(), "", "joints (globs) that count in no verdict", (s, v) => s with { Ignore = v.List })
-            { Example = "\"*Thumb*\"" },
+            { Example = "\"*thumb*\"" },
         new("before", Shape.Of(Unit.FramesOrTime, 0, 1000000), "1 s", "lead before the bad frames of a window", (s, v) => s with { Before = v.Extent }),
         new("after", Shape.Of(Unit.FramesOrTime, 0, 1000000), "1 s", "time after the bad frames of a window", (s, v) => s with { After = v.Extent }),
     ]);

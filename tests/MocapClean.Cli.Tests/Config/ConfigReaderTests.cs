@@ -146,7 +146,7 @@ public sealed class ConfigReaderTests
     [InlineData("reshoot: {critical: [hips, [a]]}", "3:21: reshoot.critical takes a text or a list of texts, not a list with a list in it")]
     [InlineData("joints: {names: x}", "3:9: joints takes a list of entries, each starting with a dash, not a block of keys")]
     [InlineData("joints: [hips]", "3:10: an entry of joints is a block with names and settings, not 'hips'")]
-    [InlineData("joints: [{smooth: none}]", "3:10: names is missing; give a text or a list of texts, such as \"*Hand\"")]
+    [InlineData("joints: [{smooth: none}]", "3:10: names is missing; give a text or a list of texts, such as \"hand_*\"")]
     [InlineData("joints: [{names: x, ingest: {takes: y}}]", "3:21: unknown key 'ingest'")]
     public void A_mistake_is_told_with_its_place(string line, string expected) => Assert.Equal("day.yaml:" + expected, Reading.ProblemsOf(line));
 

@@ -52,11 +52,4 @@ public sealed class SettingsListingTests
         Assert.Contains("| `reduce.tolerance` | `0.5 deg` | largest angle at any frame between the track and its keys as played back |", lines);
         Assert.All(lines.Where(l => l.Length > 0), l => Assert.Equal(4, l.Count(c => c == '|')));
     }
-
-    [Fact]
-    public void The_README_shows_the_table()
-    {
-        var readme = File.ReadAllText(Path.Combine(AppContext.BaseDirectory, "README.md"));
-        Assert.Equal(SettingsTable.Markdown(), readme.Split("<!-- settings -->\n")[1].Split("<!-- /settings -->")[0]);
-    }
 }

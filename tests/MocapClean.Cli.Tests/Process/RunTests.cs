@@ -197,6 +197,53 @@ public sealed class RunTests : IDisposable
         Assert.Contains("takes/yard/lantern-walk_01.csv", result.Output[result.Output.IndexOf("left over", StringComparison.Ordinal)..], StringComparison.Ordinal);
     }
 
+    [Fact]
+    public void Joints_that_no_take_has_and_the_reason_of_each_verdict_are_told()
+    {
+        folder.Put("demo/typo.yaml", "ingest: { takes: takes }\noutput: { folder: ../out }\nreshoot: { critical: pelvsi }\njoints: [ { names: hand_x, smooth: none } ]\n");
+        var result = Tool.Run("run", folder["demo/typo.yaml"]);
+        Assert.Equal(0, result.Code);
+        Assert.Contains("mistyped? reshoot.critical: 'pelvsi' matches no joint", result.Output, StringComparison.Ordinal);
+        Assert.Contains("mistyped? joints: 'hand_x' matches no joint", result.Output, StringComparison.Ordinal);
+        Assert.Contains("re-shoot  yard/roof-drop_03.csv: ", result.Output, StringComparison.Ordinal);
+        Assert.Contains("not filled: too long", File.ReadAllText(folder["out/reports/yard/roof-drop_03.csv.diff.csv"]), StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Outputs_of_another_run_are_no_takes()
+    {
+        Assert.Equal(0, Tool.Run("run", folder["demo/takes"], "--out", folder["demo/takes/earlier"]).Code);
+        var result = Tool.Run("run", folder["demo/takes"], "--out", folder["out"]);
+        Assert.Equal(0, result.Code);
+        Assert.Contains("earlier: an output folder of another run is not searched", result.Error, StringComparison.Ordinal);
+        Assert.False(Directory.Exists(folder["out/takes/earlier"]));
+    }
+
+    [Fact]
+    public void What_inspect_prints_about_one_take_is_a_config_that_runs()
+    {
+        var odd = folder.Put("odd.csv", Takes.Wide().Replace(".q", "_rot_", StringComparison.Ordinal));
+        var look = Tool.Run("inspect", odd);
+        Assert.Equal(0, look.Code);
+        Assert.Contains("2 joints, 60 frames, 100 Hz", look.Output, StringComparison.Ordinal);
+        var result = Tool.Run("run", folder.Put("odd.yaml", look.Output));
+        Assert.True(result.Code == 0, result.Error);
+        Assert.True(File.Exists(folder["cleaned/takes/odd.csv"]));
+    }
+
+    [Fact]
+    public void A_flag_only_config_changes_no_orientation()
+    {
+        folder.Put("demo/flags.yaml", "ingest: { takes: takes }\noutput: { folder: ../out }\nfill: none\nsmooth: none\n");
+        Assert.Equal(0, Tool.Run("run", folder["demo/flags.yaml"]).Code);
+        using var session = JsonDocument.Parse(File.ReadAllText(folder["out/session.json"]));
+        Assert.All(session.RootElement.GetProperty("takes").EnumerateArray(), t =>
+        {
+            var samples = t.GetProperty("samples");
+            Assert.Equal(0, samples.GetProperty("mended").GetInt64() + samples.GetProperty("smoothed").GetInt64());
+        });
+    }
+
     private static IEnumerable<string> Lines(ToolResult result) => result.Output.Split('\n').SkipLast(2).Order();
 
     private static int Count(string text, string part) => text.Split(part).Length - 1;

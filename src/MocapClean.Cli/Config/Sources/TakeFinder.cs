@@ -95,10 +95,32 @@ public sealed class TakeFinder
         return files;
     }
 
+    /// <summary>The folder between a file and the root that an earlier run wrote into, other than this run's own; null where there is none.</summary>
+    private string? EarlierOutput(string folder)
+    {
+        while (RealPath.IsWithin(folder, root) && !output.Holds(folder))
+        {
+            if (File.Exists(Path.Combine(folder, "log", "journal.jsonl")) && File.Exists(Path.Combine(folder, "session.json")))
+            {
+                return folder;
+            }
+
+            folder = Path.GetDirectoryName(folder) ?? "";
+        }
+
+        return null;
+    }
+
     private bool Accept(GlobSearch search, string path, string real)
     {
         if (IsExcepted(path) || real == Slates())
         {
+            return false;
+        }
+
+        if (EarlierOutput(Path.GetDirectoryName(path)!) is { } earlier)
+        {
+            notes.Add($"{Relative(earlier)}: an output folder of another run is not searched");
             return false;
         }
 

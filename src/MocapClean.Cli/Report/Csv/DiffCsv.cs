@@ -12,7 +12,7 @@ public static class DiffCsv
         using var csv = CsvWriter.Create(output, ReportCsv.Options, leaveOpen: true);
         csv.WriteHeader([
             "joint", "first_frame", "last_frame", "kind", "action", "largest_deg", "expected_error_deg", "spreads",
-            "first_timecode", "last_timecode",
+            "first_timecode", "last_timecode", "note",
         ]);
         foreach (var row in report.Diff.Rows)
         {
@@ -27,6 +27,7 @@ public static class DiffCsv
             csv.WriteNumber(f.Spreads is { } s ? Math.Round(s, 2) : null);
             csv.WriteField(report.Labels.TimeCode(f.First));
             csv.WriteField(report.Labels.TimeCode(f.Last));
+            csv.WriteField(f.Note);
             csv.EndRecord();
         }
     }

@@ -20,7 +20,7 @@ public static class ReshootCsv
                 csv.WriteField(window.LastFrame, []);
                 csv.WriteField(window.FirstTimecode);
                 csv.WriteField(window.LastTimecode);
-                csv.WriteField(string.Join(' ', window.Joints));
+                csv.WriteField(string.Join("; ", window.Joints));
                 csv.WriteField(window.Reason);
                 csv.EndRecord();
             }

@@ -37,7 +37,7 @@ public sealed record FillSettings
     /// <summary>The settings as the config knows them.</summary>
     public static SettingBlock<FillSettings> Table { get; } = new("fill", "Missing and rejected runs are bridged.",
     [
-        new("method", Shape.OneOf("gaussian-process", "spline", "slerp", "none"), "gaussian-process", "how a run is bridged",
+        new("method", Shape.OneOf("gaussian-process", "spline", "slerp", "none"), "gaussian-process", "how a run is bridged: as the joint moves in this take, by a cubic in the rotation vector, straight, or not at all",
             (s, v) => s with
             {
                 Method = v.Word switch

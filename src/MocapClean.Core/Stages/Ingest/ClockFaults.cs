@@ -20,7 +20,7 @@ internal static class ClockFaults
             }
             else if (clock.Lost(n) is > 0 and var lost)
             {
-                found.Add(Row(n, FaultKind.LostFrames, FaultAction.Left, $"{lost} {(lost == 1 ? "frame" : "frames")} lost before this one") with { Lost = lost });
+                found.Add(Row(n, FaultKind.LostFrames, FaultAction.Left, $"{lost} {(lost == 1 ? "frame" : "frames")} lost here") with { Lost = lost });
             }
             else if ((clock.Delivered[n] - clock.Delivered[n - 1]) * clock.Rate > WildAbove)
             {

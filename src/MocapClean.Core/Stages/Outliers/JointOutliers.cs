@@ -1,5 +1,6 @@
 using System.Collections.Immutable;
 using MocapClean.Core.Kernels;
+using MocapClean.Core.Stages.Fill;
 using MocapClean.Core.Takes;
 
 namespace MocapClean.Core.Stages.Outliers;
@@ -76,7 +77,8 @@ internal static class JointOutliers
             }
             else if (Math.Max(offset.In.Size, offset.Out.Size) >= SmallestTurn)
             {
-                marks.Offset(first, last, offset, settings.Fill.Worst);
+                // Where nothing may be mended, nothing is turned back either: no two ends agree exactly.
+                marks.Offset(first, last, offset, settings.Fill.Method == FillMethod.None ? 0 : settings.Fill.Worst);
             }
         }
 

@@ -42,7 +42,7 @@ public sealed record SmoothSettings
     /// <summary>The settings as the config knows them.</summary>
     public static SettingBlock<SmoothSettings> Table { get; } = new("smooth", "Smoothing in the quaternion domain, renormalised.",
     [
-        new("method", Shape.OneOf("adaptive", "whittaker", "butterworth", "savitzky-golay", "none"), "adaptive", "how a track is smoothed",
+        new("method", Shape.OneOf("adaptive", "whittaker", "butterworth", "savitzky-golay", "none"), "adaptive", "strong at rest and weak in motion; one strength a joint; two-pass low-pass; local polynomial; not at all",
             (s, v) => s with
             {
                 Method = v.Word switch
