@@ -20,7 +20,7 @@ internal readonly record struct EdgeMeasure(RunMeasure Room, Quat RoomTurn, RunM
 /// </summary>
 internal sealed class EdgeTest
 {
-    private readonly Dictionary<Pattern, NeighbourFit> regular = [];
+    private readonly FitCache fits = new(Solve);
 
     /// <summary>Tests the edge before a sample; null where too little is seen to tell.</summary>
     public EdgeMeasure? At(MotionPath path, int edge, Pattern most) => Across(path, edge, edge - 1, most);
@@ -48,7 +48,7 @@ internal sealed class EdgeTest
             }
         }
 
-        var fit = Fit(neighbours);
+        var fit = fits.For(neighbours);
         // Turned on the left, the motion that the joint feels goes on: the true sample after the edge is left exp(motion).
         var roomTurn = right * (left * RotationVector.Exp(fit.Predict(0, joint))).Conjugate;
         var jointTurn = (RotationVector.Exp(fit.Predict(0, room)) * left).Conjugate * right;
@@ -56,22 +56,6 @@ internal sealed class EdgeTest
         return new EdgeMeasure(
             new RunMeasure(pattern, Chart.Log(roomTurn).Norm, fit.Misfit(joint)), roomTurn,
             new RunMeasure(pattern, Chart.Log(jointTurn).Norm, fit.Misfit(room)), jointTurn);
-    }
-
-    private NeighbourFit Fit(TrustedNeighbours neighbours)
-    {
-        if (!neighbours.AreRegular)
-        {
-            return Solve(neighbours);
-        }
-
-        var pattern = neighbours.Pattern;
-        if (!regular.TryGetValue(pattern, out var fit))
-        {
-            regular[pattern] = fit = Solve(neighbours);
-        }
-
-        return fit;
     }
 
     private static NeighbourFit Solve(TrustedNeighbours neighbours)

@@ -14,7 +14,7 @@ internal readonly record struct RunMeasure(Pattern Pattern, double Size, double 
 /// </summary>
 internal sealed class RunTest
 {
-    private readonly Dictionary<Pattern, NeighbourFit> regular = [];
+    private readonly FitCache fits = new(Solve);
 
     /// <summary>Tests the samples from first to last; null where too little is seen to tell.</summary>
     public RunMeasure? At(MotionPath path, int first, int last, Pattern most)
@@ -36,7 +36,7 @@ internal sealed class RunTest
             }
         }
 
-        var fit = Fit(neighbours);
+        var fit = fits.For(neighbours);
         var size = 0.0;
         for (var n = first; n <= last; n++)
         {
@@ -48,22 +48,6 @@ internal sealed class RunTest
         }
 
         return new RunMeasure(neighbours.Pattern, Math.Sqrt(size), fit.Misfit(values));
-    }
-
-    private NeighbourFit Fit(TrustedNeighbours neighbours)
-    {
-        if (!neighbours.AreRegular)
-        {
-            return Solve(neighbours);
-        }
-
-        var pattern = neighbours.Pattern;
-        if (!regular.TryGetValue(pattern, out var fit))
-        {
-            regular[pattern] = fit = Solve(neighbours);
-        }
-
-        return fit;
     }
 
     private static NeighbourFit Solve(TrustedNeighbours neighbours)
