@@ -30,6 +30,7 @@ internal static class RunSummary
             terminal.Result($"mistyped? {unmatched}");
         }
 
+        PrintNames(terminal, "noisier than three times the median joint of their take", NoisyJoints(report));
         PrintNames(terminal, "not run", report.NotRun);
         PrintNames(terminal, "out of date", report.Stale);
         PrintNames(terminal, "left over in the output folder", report.Leftovers);
@@ -41,6 +42,17 @@ internal static class RunSummary
         terminal.Result("verdicts: " + string.Join(", ", report.Verdicts.Where(v => v.Takes > 0).Select(v => $"{v.Takes} {v.Verdict}")));
         terminal.Result(closing);
     }
+
+    /// <summary>A joint three times noisier than its siblings is worth a look at its sensor.</summary>
+    private static List<string> NoisyJoints(SessionReport report) =>
+    [
+        .. report.Takes.SelectMany(t =>
+        {
+            var noises = t.PerJoint.Select(j => j.NoiseDeg ?? 0).Where(n => n > 0).Order().ToList();
+            return noises.Count < 3 ? [] : t.PerJoint.Where(j => j.NoiseDeg > 3 * noises[noises.Count / 2]).Select(j => j.Name);
+        }).GroupBy(n => n, StringComparer.Ordinal).OrderByDescending(g => g.Count()).ThenBy(g => g.Key, StringComparer.Ordinal)
+            .Select(g => $"{g.Key} in {g.Count()} {(g.Count() == 1 ? "take" : "takes")}"),
+    ];
 
     private static string AtMost(List<TakeSummary> takes)
     {

@@ -93,7 +93,7 @@ public sealed class SmoothStage : IStage
         {
             var stretch = curve.Stretches[s];
             var (size, from) = (0.0, curve.Starts[s]);
-            var tooFast = new List<int>();
+            var (tooFast, held) = (new List<int>(), new List<int>());
             for (var i = from; i < curve.Starts[s + 1]; i++)
             {
                 squared[i] = (smoothed.Samples[i] + (-curve.Samples[i])).NormSquared;
@@ -104,14 +104,21 @@ public sealed class SmoothStage : IStage
                     continue;
                 }
 
-                var moved = Bounded(curve.Samples[i], smoothed.Samples[i].Normalised(), largest);
+                var wanted = smoothed.Samples[i].Normalised();
+                var moved = Bounded(curve.Samples[i], wanted, largest);
+                if (!moved.Equals(wanted))
+                {
+                    held.Add(frame);
+                }
+
                 var angle = Angle.Between(curve.Samples[i], moved);
                 samples[frame] = angle > Unchanged ? curve.Signed(i, moved) : samples[frame];
                 size = Math.Max(size, angle);
             }
 
             rows.Add(Row(joint, stretch, FaultAction.Smoothed) with { SizeRadians = size });
-            rows.AddRange(TooFast(joint, tooFast));
+            rows.AddRange(Runs(joint, tooFast, FaultAction.Unsmoothed, "kept as it was: the joint turns faster here than the filter can follow"));
+            rows.AddRange(Runs(joint, held, FaultAction.Smoothed, "smoothing would move it farther: held to the largest move allowed"));
         }
 
         var noise = 2 * Math.Sqrt(NoiseEstimate.Variance(squared, smoothed.Leverage, curve.Finest));
@@ -131,16 +138,13 @@ public sealed class SmoothStage : IStage
     }
 
     // A row for every run of neighbouring frames.
-    private static IEnumerable<Finding> TooFast(int joint, List<int> frames)
+    private static IEnumerable<Finding> Runs(int joint, List<int> frames, FaultAction action, string note)
     {
         for (var (first, n) = (0, 1); n <= frames.Count; n++)
         {
             if (n == frames.Count || frames[n] > frames[n - 1] + 1)
             {
-                yield return Row(joint, new Segment(frames[first], frames[n - 1]), FaultAction.Unsmoothed) with
-                {
-                    Note = "kept as it was: the joint turns faster here than the filter can follow",
-                };
+                yield return Row(joint, new Segment(frames[first], frames[n - 1]), action) with { Note = note };
                 first = n;
             }
         }

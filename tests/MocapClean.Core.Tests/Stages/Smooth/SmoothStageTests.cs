@@ -91,7 +91,9 @@ public sealed class SmoothStageTests
         var bounded = samples.Smooth(new SmoothSettings { LargestRadians = Angle.FromDegrees(0.7) });
         var (far, near) = (NoisyMotion.Apart(samples, free), NoisyMotion.Apart(samples, bounded.Tracks[0].Samples));
         Assert.Equal(0.7, near.Max(), 1e-9);
-        Assert.Equal(0.7, Angle.ToDegrees(bounded.Findings.Single().SizeRadians), 1e-9);
+        Assert.Equal(0.7, Angle.ToDegrees(bounded.Findings[0].SizeRadians), 1e-9);
+        var told = bounded.Findings.Skip(1).SelectMany(f => Enumerable.Range(f.First, f.Count));
+        Assert.Equal(Enumerable.Range(0, far.Length).Where(n => far[n] > 0.7), told);
         Assert.All(far.Zip(near), p => Assert.Equal(Math.Min(p.First, 0.7), p.Second, 1e-9));
     }
 
