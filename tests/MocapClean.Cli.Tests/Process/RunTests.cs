@@ -165,9 +165,10 @@ public sealed class RunTests : IDisposable
 
         folder.Put("in/late.csv", Takes.Wide());
         Assert.Contains("late.csv", process.StandardOutput.ReadLine(), StringComparison.Ordinal);
-        System.Diagnostics.Process.Start("kill", ["-INT", process.Id.ToString(System.Globalization.CultureInfo.InvariantCulture)]).WaitForExit();
+        // Not INT: a process that was started in the background of a script has it ignored.
+        System.Diagnostics.Process.Start("kill", ["-TERM", process.Id.ToString(System.Globalization.CultureInfo.InvariantCulture)]).WaitForExit();
         Assert.True(process.WaitForExit(60_000));
-        Assert.Equal(130, process.ExitCode);
+        Assert.Equal(143, process.ExitCode);
         Assert.True(File.Exists(folder["out/takes/late.csv"]));
     }
 
