@@ -21,7 +21,7 @@ internal static class RunCommand
         var workers = new Option<int>("--workers") { HelpName = "N", DefaultValueFactory = _ => Environment.ProcessorCount, Description = "takes at the same time" };
         var fresh = new Option<bool>("--fresh") { Description = "do again what an earlier run has done" };
         var follow = new Option<bool>("--follow") { Description = "keep watching for new takes until interrupted" };
-        var dryRun = new Option<bool>("--dry-run") { Description = "write nothing; print what would change" };
+        var dryRun = new Option<bool>("--dry-run") { Description = "write nothing; print what a run of all takes would print" };
         var strict = new Option<bool>("--strict") { Description = "end with 3 when a re-shoot is suggested" };
         var quiet = new Option<bool>("--quiet") { Description = "no line for each take, no progress" };
         workers.Validators.Add(r =>
